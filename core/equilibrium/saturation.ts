@@ -1,0 +1,247 @@
+import { NotConverged, OutOfRange } from '../errors.ts';
+import { auxiliary } from '../models/auxiliary.ts';
+import type { Medium } from './medium.ts';
+import { bracketedRoot } from './root.ts';
+
+/** Liquid and vapour in equilibrium: K, Pa, kg/m³. */
+export interface Saturation {
+  readonly T: number;
+  readonly p: number;
+  readonly rhoL: number;
+  readonly rhoV: number;
+}
+
+/** Closer to the critical temperature than this, the critical point answers. */
+export const criticalCap = 1e-4;
+
+/**
+ * Lowest temperature at which the saturation line of the supercooled liquid is offered as a guide
+ * for solvers; what is drawn ends at the triple point.
+ */
+const lowest = (m: Medium): number => Math.min(m.substance.fluid.validity.Tmin, 0.85 * triple(m));
+const triple = (m: Medium): number => m.substance.triplePoints[0].T;
+
+/**
+ * Saturation at temperature T (K): equal pressure and Gibbs energy of liquid and vapour.
+ *
+ * Method: Newton in both densities on J = δ(1 + δ αR_δ) and K = δ αR_δ + αR + ln δ from the
+ * published auxiliary equations, steps held so that neither density leaves its side of the critical
+ * one; should that fail, a bracketed search for the pressure at which both Gibbs energies agree.
+ * The pressure is taken from the vapour side, where no digits cancel.
+ * Domain: from 15 % below the triple temperature (supercooled liquid, a guide for solvers only) to
+ * the critical temperature; elsewhere throws OutOfRange. Within 1e-4 K of the critical temperature
+ * the critical point is returned.
+ * Source of the method: R. Akasaka, J. Therm. Sci. Technol. 3, 442 (2008).
+ */
+export function saturationAt(m: Medium, T: number, start?: Saturation): Saturation {
+  const { critical, fluid } = m;
+  if (m.lastSaturation?.T === T) return m.lastSaturation;
+  if (!(T >= lowest(m) && T <= critical.T))
+    throw new OutOfRange(
+      'T',
+      T,
+      { min: triple(m), max: critical.T },
+      m.substance.fluid.validity.source,
+      'K',
+    );
+  if (critical.T - T < criticalCap)
+    return { T, p: critical.p, rhoL: critical.rho, rhoV: critical.rho };
+
+  const rhor = fluid.rhor;
+  const dc = critical.rho / rhor;
+  const x = 1 - T / critical.T;
+  let l = (start?.rhoL ?? auxiliary(m.substance.saturation.liquidDensity, T)) / rhor;
+  let v = (start?.rhoV ?? auxiliary(m.substance.saturation.vapourDensity, T)) / rhor;
+  if (!(l > dc * (1 + 1e-9)) || !(v < dc * (1 - 1e-9)) || !(v > 0)) {
+    l = dc * (1 + 1.6 * Math.sqrt(x));
+    v = dc * Math.max(0.05, 1 - 1.6 * Math.sqrt(x));
+  }
+  const tolerance = 1e-12 + 1e-14 / x;
+  let last = Infinity;
+  for (let i = 0; i < 60; i++) {
+    fluid.residual(T, l * rhor);
+    const Jl = l * (1 + fluid.aRd);
+    const Kl = fluid.aRd + fluid.aR + Math.log(l);
+    const a = 1 + 2 * fluid.aRd + fluid.aRdd;
+    fluid.residual(T, v * rhor);
+    const Jv = v * (1 + fluid.aRd);
+    const Kv = fluid.aRd + fluid.aR + Math.log(v);
+    const b = 1 + 2 * fluid.aRd + fluid.aRdd;
+    const r = Jv - Jl;
+    const B = (Kv - Kl - r / l) / (1 / l - 1 / v);
+    let dl = (B + r) / a;
+    let dv = B / b;
+    if (!Number.isFinite(dl) || !Number.isFinite(dv)) break;
+    let size = Math.max(Math.abs(dl) / l, Math.abs(dv) / v);
+    if (size < tolerance || (size < 1e-7 && size >= last)) {
+      v += dv;
+      l += dl;
+      const solved = settle(m, T, l, v);
+      if (solved) return solved;
+      break;
+    }
+    last = size;
+    while (!(l + dl > dc) || !(v + dv < dc) || !(v + dv > 0.2 * v) || l + dl > 1.5 * l) {
+      dl *= 0.5;
+      dv *= 0.5;
+      size *= 0.5;
+      if (size < 1e-16) break;
+    }
+    l += dl;
+    v += dv;
+  }
+  return saturationByBracket(m, T);
+}
+
+function settle(m: Medium, T: number, l: number, v: number): Saturation | null {
+  const dc = m.critical.rho / m.fluid.rhor;
+  if (!(l > dc && v < dc && v > 0 && l - v > 1e-6)) return null;
+  const rhoV = v * m.fluid.rhor;
+  m.fluid.residual(T, rhoV);
+  const p = rhoV * m.fluid.R * T * (1 + m.fluid.aRd);
+  const solved = { T, p, rhoL: l * m.fluid.rhor, rhoV };
+  m.lastSaturation = solved;
+  return solved;
+}
+
+/** Pressure at which the two branches have one Gibbs energy, searched between the spinodals. */
+function saturationByBracket(m: Medium, T: number): Saturation {
+  const { fluid, critical } = m;
+  const RT = fluid.R * T;
+  const slope = (rho: number): number => {
+    fluid.residual(T, rho);
+    return 1 + 2 * fluid.aRd + fluid.aRdd;
+  };
+  const p = (rho: number): number => {
+    fluid.residual(T, rho);
+    return rho * RT * (1 + fluid.aRd);
+  };
+  const spinodal = (from: number, factor: number): number => {
+    let good = from;
+    let bad = from;
+    for (let i = 0; i < 4000; i++) {
+      bad = good * factor;
+      if (slope(bad) <= 0) break;
+      good = bad;
+      if ((factor > 1 && good > critical.rho) || (factor < 1 && good < critical.rho)) break;
+    }
+    for (let i = 0; i < 60; i++) {
+      const mid = 0.5 * (good + bad);
+      if (slope(mid) > 0) good = mid;
+      else bad = mid;
+    }
+    return good;
+  };
+  const topV = spinodal(critical.rho * 1e-12, 1.02);
+  const bottomL = spinodal(auxiliary(m.substance.saturation.liquidDensity, T) * 1.02, 0.998);
+  const high = p(topV);
+  const low = Math.max(p(bottomL), high * 1e-14);
+  const onBranch = (target: number, from: number, to: number): number =>
+    bracketedRoot(
+      (rho, out) => {
+        out.value = p(rho) - target;
+        out.slope = RT * (1 + 2 * fluid.aRd + fluid.aRdd);
+      },
+      from,
+      to,
+      { tolerance: 1e-15 },
+    );
+  const K = (rho: number): number => {
+    fluid.residual(T, rho);
+    return fluid.aRd + fluid.aR + Math.log(rho);
+  };
+  let rhoL = NaN;
+  let rhoV = NaN;
+  const found = bracketedRoot(
+    (log, out) => {
+      const target = Math.exp(log);
+      rhoV = onBranch(target, 0, topV);
+      rhoL = onBranch(target, bottomL, bottomL * 3);
+      out.value = K(rhoL) - K(rhoV);
+      out.slope = (target / RT) * (1 / rhoL - 1 / rhoV);
+    },
+    Math.log(low) + 1e-12,
+    Math.log(high) - 1e-12,
+    { tolerance: 1e-15, name: 'saturation' },
+  );
+  if (!(rhoL > critical.rho && rhoV < critical.rho)) throw new NotConverged('saturation', { T });
+  const solved = { T, p: Math.exp(found), rhoL, rhoV };
+  m.lastSaturation = solved;
+  return solved;
+}
+
+/**
+ * Slope of the saturation line (Pa/K) by Clausius and Clapeyron at a solved point, from residual
+ * entropies alone, so that the reference state never enters.
+ */
+export function saturationSlope(m: Medium, at: Saturation): number {
+  const { fluid } = m;
+  fluid.residual(at.T, at.rhoL);
+  const sL = fluid.aRt - fluid.aR - Math.log(at.rhoL);
+  fluid.residual(at.T, at.rhoV);
+  const sV = fluid.aRt - fluid.aR - Math.log(at.rhoV);
+  return (fluid.R * (sV - sL)) / (1 / at.rhoV - 1 / at.rhoL);
+}
+
+/**
+ * Saturation at pressure p (Pa).
+ *
+ * Method: bracketed Newton of ln p over 1/T from the auxiliary vapour pressure, each step a solved
+ * saturation state.
+ * Domain: triple to critical pressure of the equations, ends included; elsewhere throws OutOfRange.
+ */
+export function saturationAtPressure(m: Medium, p: number, start?: Saturation): Saturation {
+  const { critical, triple } = m;
+  if (!(p >= triple.p * (1 - 1e-12) && p <= critical.p))
+    throw new OutOfRange(
+      'p',
+      p,
+      { min: triple.p, max: critical.p },
+      m.substance.fluid.validity.source,
+      'Pa',
+    );
+  if (p <= triple.p) return triple;
+  const capT = critical.T - criticalCap;
+  const cap = saturationAt(m, capT);
+  if (p >= cap.p) {
+    const T = capT + (criticalCap * (p - cap.p)) / Math.max(critical.p - cap.p, 1e-300);
+    return { T: Math.min(T, critical.T), p, rhoL: critical.rho, rhoV: critical.rho };
+  }
+  const log = Math.log(p);
+  let solved = start ?? cap;
+  const x = bracketedRoot(
+    (inverse, out) => {
+      solved = saturationAt(m, 1 / inverse);
+      out.value = Math.log(solved.p) - log;
+      out.slope = -saturationSlope(m, solved) / (solved.p * inverse * inverse);
+    },
+    1 / capT,
+    1 / triple.T,
+    {
+      start: 1 / (start?.T ?? guessTemperature(m, log)),
+      tolerance: 2e-15,
+      name: 'saturation at p',
+    },
+  );
+  const T = 1 / x;
+  solved = saturationAt(m, T);
+  return { ...solved, p };
+}
+
+function guessTemperature(m: Medium, log: number): number {
+  const equation = m.substance.saturation.pressure;
+  let low = m.triple.T;
+  let high = m.critical.T - criticalCap;
+  let atLow = Math.log(auxiliary(equation, low));
+  let atHigh = Math.log(auxiliary(equation, high));
+  let x = 1 / low;
+  for (let i = 0; i < 5; i++) {
+    const share = Math.min(1, Math.max(0, (log - atLow) / (atHigh - atLow)));
+    x = 1 / low + share * (1 / high - 1 / low);
+    const value = Math.log(auxiliary(equation, 1 / x));
+    if (Math.abs(value - log) < 1e-6) break;
+    if (value < log) [low, atLow] = [1 / x, value];
+    else [high, atHigh] = [1 / x, value];
+  }
+  return 1 / x;
+}

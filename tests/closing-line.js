@@ -1,0 +1,7 @@
+import { readFileSync } from 'node:fs';
+
+const { numPassedTests, numFailedTests, success } = JSON.parse(
+  readFileSync('test-results.json', 'utf8'),
+);
+console.log(`${numPassedTests} passed, ${numFailedTests} failed`);
+process.exit(success && numPassedTests > 0 ? 0 : 1);
