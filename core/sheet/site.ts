@@ -1,0 +1,50 @@
+import {
+  absoluteError,
+  atmosphereAt,
+  parseReading,
+  pressureError,
+  probeError,
+  standardPressure,
+} from '../units/index.ts';
+import type { Site } from './schema.ts';
+
+/**
+ * Absolute pressure of the air at a site (Pa): its barometer, else the standard atmosphere at its
+ * altitude (ISO 2533), else 101.325 kPa. Throws OutOfRange for an altitude the standard does not
+ * cover, ReadingError for a reading that cannot be taken.
+ */
+export function localPressure(site: Site | undefined): number {
+  if (site?.barometer !== undefined)
+    return parseReading(site.barometer, 'pressure', { defaultKind: 'absolute' }).value;
+  if (site?.altitude !== undefined)
+    return atmosphereAt(parseReading(site.altitude, 'altitude').value);
+  return standardPressure;
+}
+
+/** Limits of error at a site: of a probe (K) and of a pressure of the kind (Pa); 0 where unsaid. */
+export function siteErrors(
+  site: Site | undefined,
+  kind: 'gauge' | 'absolute' | 'vacuum',
+): { readonly T: number; readonly p: number } {
+  const T =
+    site?.probe === undefined ? 0 : probeError(parseReading(site.probe, 'temperatureDifference'));
+  const barometer =
+    site?.barometerError === undefined
+      ? 0
+      : Math.abs(parseReading(site.barometerError, 'pressureDifference').value);
+  const { gauge } = site ?? {};
+  let instrument = 0;
+  if (gauge && 'plusMinus' in gauge)
+    instrument = pressureError({
+      by: 'plusMinus',
+      plusMinus: parseReading(gauge.plusMinus, 'pressureDifference'),
+    });
+  else if (gauge)
+    instrument = pressureError({
+      by: 'class',
+      class: gauge.class,
+      low: parseReading(gauge.low, 'pressure', { defaultKind: 'gauge' }),
+      high: parseReading(gauge.high, 'pressure', { defaultKind: 'gauge' }),
+    });
+  return { T, p: absoluteError(kind, instrument, barometer) };
+}
