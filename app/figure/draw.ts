@@ -206,7 +206,6 @@ function drawClips(root: Element, clipped: readonly SceneLayer[], prefix: string
       (layer) => layer.id,
     )
     .join((enter) => enter.append(() => svgElement(root, 'clipPath')))
-    .order()
     .each(function (layer) {
       attributes(this, { id: `${prefix}-clip-${layer.id}` });
       if (!this.firstElementChild) this.append(svgElement(root, 'rect'));
@@ -259,7 +258,6 @@ export function drawScene(
     .selectChildren<Element, SceneLayer>('g')
     .data(drawn, (layer) => layer.id)
     .join((enter) => enter.append(() => svgElement(root, 'g')))
-    .order()
     .each(function (layer) {
       attributes(this, {
         'clip-path': layer.clip ? `url(#${prefix}-clip-${layer.id})` : null,
@@ -269,7 +267,6 @@ export function drawScene(
     .selectChildren<Element, Shape>()
     .data((layer) => layer.shapes, shapeKey)
     .join((enter) => enter.append((shape) => svgElement(root, tags[shape.kind])))
-    .order()
     .each(function (shape) {
       setShape(this, shape, interactive);
     });

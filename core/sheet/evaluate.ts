@@ -22,8 +22,11 @@ import type {
 import type { Sheet, Site, StateItem, View } from './schema.ts';
 import { localPressure, siteErrors } from './site.ts';
 
-/** Size in mm of a view's frame on its page. */
-export type FrameOf = (view: View) => { readonly width: number; readonly height: number };
+/** Size in mm of a view's frame on its page, which the caption's length may change. */
+export type FrameOf = (
+  view: View,
+  about: Pick<Results, 'cautions' | 'sites' | 'formulations'>,
+) => { readonly width: number; readonly height: number };
 
 const siteOf = (sheet: Sheet, id: string | undefined): Site | undefined =>
   id === undefined ? sheet.sites[0] : sheet.sites.find((site) => site.id === id);
@@ -100,6 +103,15 @@ function touched(
     if (margin.distance <= (thermal ? error.T : error.p)) return margin.boundary;
   }
   return null;
+}
+
+/** Every formulation that a substance's lines rest on, the fluid's first. */
+function formulations({ fluid, solids, melting, sublimation }: Substance): readonly string[] {
+  const published = [...melting, ...sublimation]
+    .filter(({ route }) => route !== 'equilibrium')
+    // Equations of one release differ in their number only.
+    .map(({ equation }) => equation.source.replace(/, eqs?\. [\d.]+/, ''));
+  return [...new Set([fluid.formulation, ...solids.map((s) => s.formulation), ...published])];
 }
 
 function mapPoints(m: Medium): readonly MapPoint[] {
@@ -223,15 +235,18 @@ export function evaluate(
       triplePressure: m.triple.p,
     };
   });
-  return {
+  const about = {
     sites,
-    states,
-    maps: sheet.views.map((view) =>
-      evaluateMap(sheet, view, mediumOf(view.substance), states, frameOf(view)),
-    ),
     cautions: cautions(judged),
     formulations: Object.fromEntries(
-      sheet.substances.map((id) => [id, mediumOf(id).substance.fluid.formulation]),
+      sheet.substances.map((id) => [id, formulations(mediumOf(id).substance)]),
+    ),
+  };
+  return {
+    ...about,
+    states,
+    maps: sheet.views.map((view) =>
+      evaluateMap(sheet, view, mediumOf(view.substance), states, frameOf(view, about)),
     ),
   };
 }

@@ -85,6 +85,6 @@ export interface Results {
   readonly states: readonly StateResult[];
   readonly maps: readonly MapResult[];
   readonly cautions: readonly Caution[];
-  /** Formulations used, by substance id. */
-  readonly formulations: Readonly<Record<string, string>>;
+  /** Formulations used, by substance id, the fluid's first. */
+  readonly formulations: Readonly<Record<string, readonly string[]>>;
 }

@@ -106,11 +106,7 @@ export const sheetSchema = v.strictObject({
   data: v.record(v.pipe(v.string(), v.maxLength(80)), v.array(v.pipe(v.number(), v.finite()))),
 });
 
-type DeepReadonly<T> = T extends (infer U)[]
-  ? readonly DeepReadonly<U>[]
-  : T extends object
-    ? { readonly [K in keyof T]: DeepReadonly<T[K]> }
-    : T;
+type DeepReadonly<T> = T extends object ? { readonly [K in keyof T]: DeepReadonly<T[K]> } : T;
 
 export type Sheet = DeepReadonly<v.InferOutput<typeof sheetSchema>>;
 export type Site = DeepReadonly<v.InferOutput<typeof siteSchema>>;

@@ -6,6 +6,7 @@ export const layers = [
   'isolines',
   'windows',
   'boundaries',
+  'points',
   'paths',
   'encounters',
   'states',

@@ -1,0 +1,44 @@
+import type { MapPoint } from '../../../core/sheet/results.ts';
+import { format, type UnitId } from '../../../core/units/index.ts';
+import type { Mark } from '../mark.ts';
+import { type } from '../page.ts';
+
+/** Triple and critical points, as open circles. */
+export const points: Mark<MapPoint> = {
+  id: 'points',
+  layer: 'points',
+  clipped: false,
+  data: ({ map, view }) => map.points.filter(({ id }) => !view.hidden.includes(id)),
+  shapes: ({ id, kind, phases, T, p }, { project, colours, words }) => [
+    {
+      kind: 'circle',
+      id,
+      of: id,
+      at: project(T, p),
+      r: 1,
+      stroke: { colour: colours.ink, weight: 0.9 },
+      fill: { colour: colours.paper },
+      title: kind === 'critical' ? words.criticalPoint : words.triplePoint(phases),
+    },
+  ],
+  labels: ({ id, kind, phases, T, p }, { project, colours, words, view }) => {
+    const name = kind === 'critical' ? words.criticalPoint : words.triplePoint(phases);
+    const unit = view.pressure.unit as UnitId;
+    const { decimal } = words;
+    const where = `${format(T, view.temperature.unit, { decimals: T % 1 < 0.2 || kind === 'triple' ? 2 : 1, decimal })}, ${format(p, unit, { digits: 4, decimal })}`;
+    return [
+      {
+        kind: 'point',
+        id,
+        of: id,
+        at: project(T, p),
+        gap: 1.8,
+        runs: [{ text: phases.includes('vapour') ? `${name} ${where}` : name }],
+        size: phases.includes('vapour') ? type.label : 7,
+        colour: phases.includes('vapour') ? colours.ink : colours.muted,
+        priority: phases.includes('vapour') ? 20 : 50,
+      },
+    ];
+  },
+  obstacles: ({ T, p }, { project }) => ({ circles: [{ at: project(T, p), r: 1.4 }] }),
+};
