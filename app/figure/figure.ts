@@ -103,7 +103,7 @@ export function composeFigure(
   const placed = layout(
     requests.filter(({ id }) => !view.hidden.includes(`label-${id}`)),
     obstacles,
-    frame,
+    { x: frame.x + 0.4, y: frame.y + 0.4, width: frame.width - 0.8, height: frame.height - 0.8 },
   );
 
   into('paper').push({

@@ -111,7 +111,11 @@ function pickedTicks(scale: Scale, length: number, spacing: number, reading: Rea
     for (const k of [1, 5, 2]) {
       for (let e = top; e > top - 7; e--) wanted.push(k * 10 ** e);
     }
-    for (let k = 1; k < 10; k++) wanted.push(low * (k / 10));
+    if (low < 0) {
+      const unit = 10 ** Math.floor(Math.log10(-low));
+      for (const step of [5, 2, 1, 0.5, 0.1].map((k) => k * unit))
+        for (let k = 1; k * step < -low; k++) wanted.push(-k * step);
+    }
   }
   const kept: { share: number; value: number }[] = [];
   for (const value of new Set(wanted.map((x) => +x.toPrecision(2)))) {

@@ -22,36 +22,35 @@ export const en = {
 
   substance: (id: string): string => substances[id]?.name ?? id,
 
-  /** A field's name; drawn in letter-spaced capitals. */
+  /** A field's name, in capitals but for the letter of an ice. */
   region: (substance: string, phase: PhaseName, solid: string | null): string => {
     switch (phase) {
       case 'liquid':
-        return substances[substance]?.liquid ?? 'liquid';
+        return (substances[substance]?.liquid ?? 'liquid').toUpperCase();
       case 'vapour':
-        return substances[substance]?.vapour ?? 'vapour';
+        return (substances[substance]?.vapour ?? 'vapour').toUpperCase();
       case 'supercritical':
-        return 'supercritical';
+        return 'SUPERCRITICAL';
       case 'solid':
-        return solid ?? 'solid, form not resolved';
+        return (solid ?? 'solid, form not resolved').toUpperCase().replace(/ IH$/, ' Ih');
     }
   },
   phase: (phase: PhaseName, solid: string | null): string =>
     phase === 'solid' ? (solid ?? 'solid, form not resolved') : phase,
 
+  /** A line's name; `alone` where no other line of its kind, or no other line at all, is about. */
   boundary: (
     substance: string,
     kind: BoundaryKind,
     form: string | null,
-    alone: boolean,
+    alone: { readonly kind: boolean; readonly line: boolean },
   ): string => {
     const name = substances[substance]?.name ?? substance;
     switch (kind) {
       case 'saturation':
-        return alone ? `boiling line of ${name}` : 'boiling line';
+        return alone.line ? `boiling line of ${name}` : 'boiling line';
       case 'melting':
-        return form && form !== 'ice Ih' && form.startsWith('ice')
-          ? `melting line of ${form}`
-          : 'melting line';
+        return alone.kind || form === null ? 'melting line' : `melting line of ${form}`;
       case 'sublimation':
         return 'sublimation line';
       case 'critical':
@@ -61,7 +60,9 @@ export const en = {
   estimated: 'estimate',
 
   triplePoint: (phases: readonly string[]): string =>
-    phases.includes('vapour') ? 'triple point' : phases.filter((x) => x !== 'liquid').join('–'),
+    phases.includes('vapour')
+      ? 'triple point'
+      : `${phases[0]}–${phases[1]!.replace('ice ', '')}–${phases[2]}`,
   criticalPoint: 'critical point',
 
   axis: {

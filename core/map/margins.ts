@@ -46,9 +46,7 @@ export function margins(m: Medium, T: number, p: number): readonly Margin[] {
     met: readonly { c: BoundaryCurve; T: number; p: number; distance: number }[],
   ): Margin => {
     const ahead = met
-      .filter(
-        ({ distance, T: Tb, p: pb }) => distance > 1e-12 * Math.max(distance === 0 ? 1 : 0, Tb, pb),
-      )
+      .filter((x) => x.distance > 1e-12 * (direction.endsWith('pressure') ? x.p : x.T))
       .sort((a, b) => a.distance - b.distance)[0];
     if (!ahead) return { direction, boundary: null, reason: absent(m, T, p, direction) };
     const { c, T: Tb, p: pb, distance } = ahead;

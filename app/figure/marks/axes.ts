@@ -196,5 +196,18 @@ export const axes: Mark<Axis> = {
       ...(axis.side === 'bottom' ? {} : { angle: axis.side === 'left' ? -90 : 90 }),
     };
     return [lines(false, 0.35), lines(true, 0.6), ...numbers, title];
-  },
+  }, // Ticks stand inside the frame, where labels would meet them.
+  obstacles: (axis, v) => ({
+    boxes:
+      axis.side === 'right'
+        ? []
+        : axis.ticks
+            .filter(({ label }) => label !== null)
+            .map(({ share }) => {
+              const [x, y] = spot(axis, share, v);
+              return axis.side === 'bottom'
+                ? { x: x - 0.3, y: y - 2, width: 0.6, height: 2 }
+                : { x, y: y - 0.3, width: 2, height: 0.6 };
+            }),
+  }),
 };

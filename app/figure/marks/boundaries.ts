@@ -6,6 +6,29 @@ import type { Point } from '../scene/scene.ts';
 const line = (b: Boundary, { project }: MarkView): readonly Point[] =>
   b.points.map(({ T, p }) => project(T, p));
 
+/** A line too short to carry a name, or one that only runs along the frame. */
+function isFaint(points: readonly Point[], { frame }: MarkView): boolean {
+  let length = 0;
+  for (let i = 1; i < points.length; i++)
+    length += Math.hypot(points[i]![0] - points[i - 1]![0], points[i]![1] - points[i - 1]![1]);
+  const away = (at: number, low: number, size: number): number =>
+    Math.min(at - low, low + size - at);
+  return (
+    length < 8 ||
+    points.every(([x]) => away(x, frame.x, frame.width) < 1) ||
+    points.every(([, y]) => away(y, frame.y, frame.height) < 1)
+  );
+}
+
+const nameOf = (b: Boundary, { words, map }: MarkView): string => {
+  const kin = map.boundaries.filter(({ kind }) => kind === b.kind);
+  const fluids = new Set(map.regions.map(({ phase }) => phase));
+  return words.boundary(b.of, b.kind, b.form, {
+    kind: new Set(kin.map(({ form }) => form)).size === 1,
+    line: fluids.size <= 2,
+  });
+};
+
 /** The lines between phases, named along them. */
 export const boundaries: Mark<Boundary> = {
   id: 'boundaries',
@@ -25,13 +48,14 @@ export const boundaries: Mark<Boundary> = {
         join: 'round',
         ...(b.basis === 'estimate' ? { dash: [4, 2.5] } : {}),
       },
-      title: view.words.boundary(b.of, b.kind, b.form, true),
+      title: nameOf(b, view),
     },
   ],
   labels: (b, view) => {
-    const { words, colours, map } = view;
-    const fluids = new Set(map.regions.map(({ phase }) => phase));
-    const text = words.boundary(b.of, b.kind, b.form, fluids.size <= 2);
+    const { words, colours } = view;
+    const along = line(b, view);
+    if (isFaint(along, view)) return [];
+    const text = nameOf(b, view);
     return [
       {
         kind: 'line',
@@ -41,7 +65,7 @@ export const boundaries: Mark<Boundary> = {
         size: type.label,
         colour: colours.ink,
         priority: 30,
-        along: line(b, view),
+        along,
         side: 'either',
       },
     ];

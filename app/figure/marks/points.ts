@@ -25,7 +25,7 @@ export const points: Mark<MapPoint> = {
     const name = kind === 'critical' ? words.criticalPoint : words.triplePoint(phases);
     const unit = view.pressure.unit as UnitId;
     const { decimal } = words;
-    const where = `${format(T, view.temperature.unit, { decimals: T % 1 < 0.2 || kind === 'triple' ? 2 : 1, decimal })}, ${format(p, unit, { digits: 4, decimal })}`;
+    const where = `${format(T, view.temperature.unit, { decimals: 2, decimal })}, ${format(p, unit, { digits: 4, decimal })}`;
     return [
       {
         kind: 'point',

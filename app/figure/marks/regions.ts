@@ -23,18 +23,24 @@ export const regions: Mark<Region> = {
       },
     ];
   },
-  labels: (r, { map, colours, frame, words }) => [
-    {
-      kind: 'area',
-      id: r.id,
-      runs: [
-        { text: words.region(map.substance, r.phase, r.solid).toLocaleUpperCase(words.language) },
-      ],
-      size: type.region,
-      spacing: 0.16,
-      colour: colours.muted,
-      priority: 40,
-      ring: r.ring.map(([x, y]): Point => [x + frame.x, y + frame.y]),
-    },
-  ],
+  labels: (r, { map, colours, frame, words }) => {
+    // A sliver along the frame is seen, not named.
+    const narrow = ([0, 1] as const).some((axis) => {
+      const values = r.ring.map((place) => place[axis]);
+      return Math.max(...values) - Math.min(...values) < 2.5;
+    });
+    if (narrow) return [];
+    return [
+      {
+        kind: 'area',
+        id: r.id,
+        runs: [{ text: words.region(map.substance, r.phase, r.solid) }],
+        size: type.region,
+        spacing: 0.16,
+        colour: colours.muted,
+        priority: 40,
+        ring: r.ring.map(([x, y]): Point => [x + frame.x, y + frame.y]),
+      },
+    ];
+  },
 };

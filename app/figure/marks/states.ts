@@ -76,6 +76,7 @@ export const states: Mark<StateResult> = {
         of: s.id,
         at,
         gap: 1.6,
+        leader: true,
         plate: true,
         runs: [{ text: s.name }],
         size: type.label,
