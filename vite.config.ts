@@ -1,6 +1,27 @@
+import { readFileSync } from 'node:fs';
 import react from '@vitejs/plugin-react';
+import type { Plugin } from 'vite';
 import { defineConfig } from 'vitest/config';
 import { chromiumPath } from './tests/browser/chromium.ts';
+
+const { version } = JSON.parse(readFileSync('package.json', 'utf8')) as { version: string };
+
+/** Nothing from elsewhere, nothing inline; in development vite itself needs inline styles. */
+const contentPolicy: Plugin = {
+  name: 'content-policy',
+  apply: 'build',
+  transformIndexHtml: () => [
+    {
+      tag: 'meta',
+      injectTo: 'head-prepend',
+      attrs: {
+        'http-equiv': 'Content-Security-Policy',
+        content:
+          "default-src 'none'; script-src 'self'; style-src 'self'; worker-src 'self'; connect-src 'self'; img-src 'self' data: blob:; font-src 'self'; base-uri 'none'; form-action 'none'",
+      },
+    },
+  ],
+};
 
 export default defineConfig(async () => {
   if (process.env.VITEST) process.env.CHROMIUM_PATH = await chromiumPath();
@@ -8,7 +29,8 @@ export default defineConfig(async () => {
     root: 'app',
     base: './',
     publicDir: '../public',
-    plugins: [react()],
+    plugins: [react(), contentPolicy],
+    define: { __SIMMERLINE_VERSION__: JSON.stringify(version) },
     build: { target: 'es2022', outDir: '../dist', emptyOutDir: true },
     worker: { format: 'es' as const },
     test: {

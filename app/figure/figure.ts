@@ -4,6 +4,7 @@ import type { Sheet } from '../../core/sheet/schema.ts';
 import type { Words } from '../words/en.ts';
 import { printColours } from './colours.ts';
 import { layout, type PlacedBox } from './layout/layout.ts';
+import type { LabelRequest } from './layout/request.ts';
 import type { Mark, MarkView } from './mark.ts';
 import { axes, grid } from './marks/axes.ts';
 import { beyond } from './marks/beyond.ts';
@@ -47,6 +48,7 @@ export interface Figure {
   readonly view: MarkView;
   /** Where labels stand, for taking hold of them. */
   readonly boxes: readonly PlacedBox[];
+  readonly requests: readonly LabelRequest[];
 }
 
 /**
@@ -93,18 +95,20 @@ export function composeFigure(
     return known.shapes;
   };
   for (const { layer, clipped, shapes } of made) into(layer, clipped).push(...shapes);
-  const requests = made.flatMap(({ labels }) => labels);
+  const requests = made
+    .flatMap(({ labels }) => labels)
+    .filter(({ id }) => !view.hidden.includes(`label-${id}`))
+    .map((request) => {
+      const offset = view.labelOffsets[request.id];
+      return offset ? { ...request, offset } : request;
+    });
   const met = made.flatMap(({ obstacles }) => obstacles);
   const obstacles = {
     polylines: met.flatMap(({ polylines }) => polylines ?? []),
     boxes: met.flatMap(({ boxes }) => boxes ?? []),
     circles: met.flatMap(({ circles }) => circles ?? []),
   };
-  const placed = layout(
-    requests.filter(({ id }) => !view.hidden.includes(`label-${id}`)),
-    obstacles,
-    { x: frame.x + 0.4, y: frame.y + 0.4, width: frame.width - 0.8, height: frame.height - 0.8 },
-  );
+  const placed = layout(requests, obstacles, frame);
 
   into('paper').push({
     kind: 'rect',
@@ -146,5 +150,6 @@ export function composeFigure(
     },
     view: markView,
     boxes: placed.boxes,
+    requests,
   };
 }

@@ -21,7 +21,16 @@ export const points: Mark<MapPoint> = {
       title: kind === 'critical' ? words.criticalPoint : words.triplePoint(phases),
     },
   ],
-  labels: ({ id, kind, phases, T, p }, { project, colours, words, view }) => {
+  labels: ({ id, kind, phases, T, p }, { project, colours, words, view, frame }) => {
+    const [x, y] = project(T, p);
+    const edge = Math.min(
+      x - frame.x,
+      frame.x + frame.width - x,
+      y - frame.y,
+      frame.y + frame.height - y,
+    );
+    // In the corner of a work figure the point is only where the map happens to begin.
+    if (edge < 0.8 && kind === 'triple' && !view.labelOffsets[id]) return [];
     const name = kind === 'critical' ? words.criticalPoint : words.triplePoint(phases);
     const unit = view.pressure.unit as UnitId;
     const { decimal } = words;

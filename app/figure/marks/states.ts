@@ -49,9 +49,8 @@ export const states: Mark<StateResult> = {
     });
     return shapes;
   },
-  labels: (s, { project, colours, view }) => {
+  labels: (s, { project, colours }) => {
     const at = project(s.T, s.p);
-    const offset = view.labelOffsets[s.id];
     const tag: LabelRequest = {
       kind: 'point',
       id: s.id,
@@ -64,10 +63,8 @@ export const states: Mark<StateResult> = {
       size: type.label,
       colour: colours.paper,
       priority: 10,
-      ...(offset ? { offset } : {}),
     };
     if (!s.name) return [tag];
-    const named = view.labelOffsets[`${s.id}-name`];
     return [
       tag,
       {
@@ -82,7 +79,6 @@ export const states: Mark<StateResult> = {
         size: type.label,
         colour: colours.own[0]!,
         priority: 12,
-        ...(named ? { offset: named } : {}),
       },
     ];
   },

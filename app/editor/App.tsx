@@ -1,0 +1,77 @@
+import { useEffect } from 'react';
+import type { Shelf } from '../store/shelf.ts';
+import { openFile } from './actions.ts';
+import { Bench } from './Bench.tsx';
+import { useApp, useAppStore, useWords } from './context.ts';
+import { Messages } from './Messages.tsx';
+import { ReadingLine } from './ReadingLine.tsx';
+import { RunTable } from './RunTable.tsx';
+import { SideColumn } from './SideColumn.tsx';
+import { StartScreen } from './StartScreen.tsx';
+import { Strip } from './Strip.tsx';
+
+/** Keys that work anywhere, and files dropped on the page. */
+function usePageHands(): void {
+  const store = useAppStore();
+  const words = useWords();
+  useEffect(() => {
+    const onKey = (event: KeyboardEvent): void => {
+      const typing = event.target instanceof HTMLElement && event.target.matches('input, select');
+      const command = event.ctrlKey || event.metaKey;
+      const key = event.key.toLowerCase();
+      if (command && key === 'z' && !typing) {
+        if (event.shiftKey) store.getState().redo();
+        else store.getState().undo();
+      } else if (command && key === 'y' && !typing) store.getState().redo();
+      else if ((event.key === 'Delete' || event.key === 'Backspace') && !typing) {
+        const { selected, sheet } = store.getState();
+        const item = sheet?.items.find(({ id }) => id === selected);
+        if (!item) return;
+        store.getState().edit(`remove ${item.tag}`, (s) => ({
+          ...s,
+          items: s.items.filter(({ id }) => id !== item.id),
+        }));
+      } else return;
+      event.preventDefault();
+    };
+    const onOver = (event: DragEvent): void => event.preventDefault();
+    const onDrop = (event: DragEvent): void => {
+      event.preventDefault();
+      const file = event.dataTransfer?.files[0];
+      if (file) void openFile(store, words, file);
+    };
+    window.addEventListener('keydown', onKey);
+    window.addEventListener('dragover', onOver);
+    window.addEventListener('drop', onDrop);
+    return () => {
+      window.removeEventListener('keydown', onKey);
+      window.removeEventListener('dragover', onOver);
+      window.removeEventListener('drop', onDrop);
+    };
+  }, [store, words]);
+}
+
+export function App({ shelf }: { readonly shelf: Shelf }) {
+  const open = useApp((s) => s.sheet !== null);
+  usePageHands();
+  if (!open)
+    return (
+      <div className="no-sheet">
+        <ReadingLine />
+        <StartScreen shelf={shelf} />
+        <Messages />
+      </div>
+    );
+  return (
+    <div className="workplace">
+      <Strip />
+      <main>
+        <Bench />
+        <ReadingLine />
+        <RunTable />
+      </main>
+      <SideColumn />
+      <Messages />
+    </div>
+  );
+}

@@ -1,0 +1,76 @@
+import { useRef } from 'react';
+import { format, formatReading, parseReading } from '../../core/units/index.ts';
+import { exportSvg, openFile, saveFile } from './actions.ts';
+import { useApp, useAppStore, useWords } from './context.ts';
+import { Figured } from './Figured.tsx';
+
+/** The strip above: what sheet this is, undo and redo, files. */
+export function Strip() {
+  const store = useAppStore();
+  const words = useWords();
+  const e = words.editor;
+  const sheet = useApp((s) => s.sheet);
+  const results = useApp((s) => s.results);
+  const history = useApp((s) => s.history);
+  const saved = useApp((s) => s.saved);
+  const input = useRef<HTMLInputElement>(null);
+  if (!sheet) return null;
+  const site = sheet.sites[0];
+  const local = results?.sites[0]?.local;
+  const about = [
+    words.substance(sheet.substances[0]!),
+    site &&
+      (site.altitude
+        ? `${site.name}, ${formatReading(parseReading(site.altitude, 'altitude'))}`
+        : site.name),
+    local !== undefined && format(local, 'kPa', { digits: 3, kind: 'absolute' }),
+  ].filter(Boolean);
+  return (
+    <header className="strip">
+      <h1 className="sheet-title">
+        <Figured
+          sentence={[{ field: 'title', text: sheet.title, name: e.title, hint: e.untitled }]}
+          commit={(_, text) => {
+            store.getState().edit('rename the sheet', (s) => ({ ...s, title: text.slice(0, 200) }));
+            return null;
+          }}
+        />
+      </h1>
+      <p className="about">{about.join(' · ')}</p>
+      <span className="saved" role="status">
+        {saved ? e.kept : e.keeping}
+      </span>
+      <button
+        onClick={() => store.getState().undo()}
+        disabled={history.past.length === 0}
+        title={history.past.length > 0 ? e.undoOf(history.past.at(-1)!.name) : undefined}
+      >
+        {e.undo}
+      </button>
+      <button
+        onClick={() => store.getState().redo()}
+        disabled={history.future.length === 0}
+        title={history.future.length > 0 ? e.redoOf(history.future[0]!.name) : undefined}
+      >
+        {e.redo}
+      </button>
+      <button onClick={() => store.getState().closeSheet()}>{e.sheets}</button>
+      <button onClick={() => input.current?.click()}>{e.open}</button>
+      <input
+        ref={input}
+        type="file"
+        accept=".json,.svg,application/json,image/svg+xml"
+        hidden
+        onChange={(event) => {
+          const file = event.target.files?.[0];
+          if (file) void openFile(store, words, file);
+          event.target.value = '';
+        }}
+      />
+      <button onClick={() => saveFile(store)}>{e.save}</button>
+      <button className="strong" onClick={() => void exportSvg(store, words)}>
+        {e.export}
+      </button>
+    </header>
+  );
+}

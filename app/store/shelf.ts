@@ -1,0 +1,36 @@
+import { createStore, del, get, keys, set, type UseStore } from 'idb-keyval';
+import type { Sheet } from '../../core/sheet/schema.ts';
+
+/** A sheet as this device keeps it. */
+export interface Kept {
+  readonly key: string;
+  readonly sheet: Sheet;
+  /** Milliseconds since 1970. */
+  readonly saved: number;
+  /** The page that saved it, to tell one's own changes from another tab's. */
+  readonly by: string;
+}
+
+/** Where sheets are kept; a test passes its own. */
+export interface Shelf {
+  put: (kept: Kept) => Promise<void>;
+  take: (key: string) => Promise<Kept | undefined>;
+  remove: (key: string) => Promise<void>;
+  list: () => Promise<readonly Kept[]>;
+}
+
+/** Sheets on this device, in the browser's own database; nothing leaves it. */
+export function deviceShelf(): Shelf {
+  let store: UseStore | null = null;
+  const db = (): UseStore => (store ??= createStore('simmerline', 'sheets'));
+  return {
+    put: (kept) => set(kept.key, kept, db()),
+    take: (key) => get<Kept>(key, db()),
+    remove: (key) => del(key, db()),
+    list: async () => {
+      const all = await keys<string>(db());
+      const kept = await Promise.all(all.map((key) => get<Kept>(key, db())));
+      return kept.filter((k): k is Kept => k !== undefined).sort((a, b) => b.saved - a.saved);
+    },
+  };
+}
