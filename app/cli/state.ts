@@ -6,6 +6,7 @@ import { en as words } from '../words/en.ts';
 import { cautionLines } from './cautionLines.ts';
 import { csv } from './csv.ts';
 import { localOf, pressureGiven, pressureNotes, type GivenPressure, type Local } from './given.ts';
+import { json } from './json.ts';
 import { readOptions } from './options.ts';
 import { readPoints } from './points.ts';
 import { Refusal, refusalOf } from './refusal.ts';
@@ -121,6 +122,14 @@ function text(
   ].join('\n');
 }
 
+async function reading<R>(place: string, read: () => R): Promise<R> {
+  try {
+    return read();
+  } catch (error) {
+    throw await refusalOf(error, { place });
+  }
+}
+
 /** `state <substance> (--T … --p … | --from file) [--altitude | --barometer] [--json]` */
 export async function stateCommand(args: readonly string[]): Promise<Answer> {
   const { terminal } = words;
@@ -140,34 +149,23 @@ export async function stateCommand(args: readonly string[]): Promise<Answer> {
   }
   if (T === undefined || p === undefined) throw new Refusal(terminal.stateNeeds);
 
-  const place = (name: string): string => `--${name}`;
-  let given;
-  try {
-    given = { T: parseReading(T, 'temperature') };
-  } catch (error) {
-    throw await refusalOf(error, { place: place('T') });
-  }
-  let pressure: GivenPressure;
-  try {
-    pressure = pressureGiven(p, local);
-  } catch (error) {
-    throw await refusalOf(error, { place: place('p') });
-  }
+  const warmth = await reading('--T', () => parseReading(T, 'temperature'));
+  const pressure = await reading('--p', () => pressureGiven(p, local));
   let record: StateRecord;
   try {
     const atmosphere = pressure.relative ? local.p : undefined;
-    record = stateRecord(m, given.T.value, pressure.p, atmosphere);
+    record = stateRecord(m, warmth.value, pressure.p, atmosphere);
   } catch (error) {
-    const units = { T: given.T.unit, p: pressure.reading.unit };
+    const units = { T: warmth.unit, p: pressure.reading.unit };
     throw await refusalOf(error, { units, medium: m });
   }
   const notes = pressureNotes([pressure], local);
   return flags.has('json')
-    ? { out: `${JSON.stringify(record, null, 2)}\n`, notes }
-    : { out: text(m, record, { ...given, p: pressure }, local, notes), notes: [] };
+    ? { out: json(record), notes }
+    : { out: text(m, record, { T: warmth, p: pressure }, local, notes), notes: [] };
 }
 
-async function fromFile(m: Medium, path: string, local: Local, json: boolean): Promise<Answer> {
+async function fromFile(m: Medium, path: string, local: Local, asJson: boolean): Promise<Answer> {
   const { columns, rows } = await readPoints(path, 'both');
   const records: StateRecord[] = [];
   const seen = { kindWritten: true, relative: false };
@@ -189,7 +187,7 @@ async function fromFile(m: Medium, path: string, local: Local, json: boolean): P
     }
   }
   const notes = pressureNotes([seen], local);
-  if (json) return { out: `${JSON.stringify(records, null, 2)}\n`, notes };
+  if (asJson) return { out: json(records), notes };
   const [T, p, phase, ...rest] = keys;
   const columnsOut = [T, p, phase, 'solid', ...rest, ...(seen.relative ? ['atmosphere'] : [])];
   return { out: csv(records, columnsOut), notes };

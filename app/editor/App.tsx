@@ -53,6 +53,7 @@ function usePageHands(): void {
 
 export function App({ shelf }: { readonly shelf: Shelf }) {
   const open = useApp((s) => s.sheet !== null);
+  const busy = useApp((s) => s.evaluating || s.resultsOf !== s.sheet);
   usePageHands();
   if (!open)
     return (
@@ -63,7 +64,7 @@ export function App({ shelf }: { readonly shelf: Shelf }) {
       </div>
     );
   return (
-    <div className="workplace">
+    <div className="workplace" aria-busy={busy}>
       <Strip />
       <main>
         <Bench />

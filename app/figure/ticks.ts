@@ -113,7 +113,7 @@ function pickedTicks(scale: Scale, length: number, spacing: number, reading: Rea
     }
     if (low < 0) {
       const unit = 10 ** Math.floor(Math.log10(-low));
-      for (const step of [5, 2, 1, 0.5, 0.1].map((k) => k * unit))
+      for (const step of [5, 2, 1].map((k) => k * unit))
         for (let k = 1; k * step < -low; k++) wanted.push(-k * step);
     }
   }
