@@ -36,15 +36,18 @@ store.subscribe(({ sheetKey }, before) => {
   }
 });
 
+function keptKey(): string | null {
+  try {
+    return sessionStorage.getItem(lastKey);
+  } catch {
+    return null;
+  }
+}
+
 /** What to show first: the demo named in the address, the sheet last open in this tab, or the start. */
 async function begin(): Promise<void> {
   const demo = demos.find((name) => name === new URLSearchParams(location.search).get('demo'));
-  let last: string | null = null;
-  try {
-    last = sessionStorage.getItem(lastKey);
-  } catch {
-    last = null;
-  }
+  const last = keptKey();
   const kept = last ? await shelf.take(last).catch(() => undefined) : undefined;
   if (kept) store.getState().openSheet(kept.sheet, kept.key);
   else if (demo) openFromText(store, words, demo, await demoText(demo));

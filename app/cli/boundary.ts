@@ -1,4 +1,5 @@
 import type { Medium } from '../../core/equilibrium/medium.ts';
+import { boundaryCurves } from '../../core/map/boundary.ts';
 import {
   formatNumber,
   fromSI,
@@ -81,7 +82,9 @@ function placeRows(
     unit,
   });
   const T = pressure ? '°C' : reading.unit;
-  const rows = [row(symbols.T, formatNumber(fromSI(record.T, T), pressure ? 2 : Math.max(2, reading.decimals)), T)];
+  const rows = [
+    row(symbols.T, formatNumber(fromSI(record.T, T), pressure ? 2 : reading.decimals), T),
+  ];
   if (T !== 'K') rows.push(row('', formatNumber(record.T, 2), 'K'));
   const p = pressure ? reading.unit : pressureUnit(record.p);
   rows.push(row(symbols.p, cell(record.p, p, { significant: 5 }), `${p}(a)`));
@@ -89,12 +92,20 @@ function placeRows(
     const power = Math.floor(Math.log10(fromSI(record.p, p)));
     const gauge = fromSI(gaugePressure(record.p, local.p), p);
     rows.push(row('', formatNumber(gauge, Math.max(0, 3 - power)), `${p}(g)`));
-    rows.push(row(symbols.atmosphere, cell(local.p, 'kPa', { significant: local.given ? 4 : 6 }), 'kPa(a)'));
+    rows.push(
+      row(symbols.atmosphere, cell(local.p, 'kPa', { significant: local.given ? 4 : 6 }), 'kPa(a)'),
+    );
   }
   return rows;
 }
 
-function text(m: Medium, kind: AskedKind, asked: Asked, local: Local, notes: readonly string[]): string {
+function text(
+  m: Medium,
+  kind: AskedKind,
+  asked: Asked,
+  local: Local,
+  notes: readonly string[],
+): string {
   const { terminal } = words;
   const { record } = asked;
   const names = sidesOf[kind];
@@ -105,17 +116,24 @@ function text(m: Medium, kind: AskedKind, asked: Asked, local: Local, notes: rea
     ...wanted.map(([name, unit, digits]): TableRow => ({
       label: terminal.symbols[name],
       cells: sides.map((side) =>
-        cell((side as unknown as Readonly<Record<string, number | null | undefined>>)[name] ?? null, unit, digits),
+        cell(
+          (side as unknown as Readonly<Record<string, number | null | undefined>>)[name] ?? null,
+          unit,
+          digits,
+        ),
       ),
       unit,
     })),
   ];
-  const heads = names.map((name) =>
-    name === 'solid' ? (record.solid!.name ?? name) : name,
+  const heads = names.map((name) => (name === 'solid' ? (record.solid!.name ?? name) : name));
+  const forms = new Set(
+    boundaryCurves(m)
+      .filter((curve) => curve.kind === kind)
+      .map(({ form }) => form),
   );
   const name = words.boundary(m.substance.id, kind, record.solid?.name ?? null, {
-    kind: record.solid?.name == null,
-    line: true,
+    kind: forms.size === 1,
+    line: false,
   });
   const also = (record.also ?? []).map((other) => {
     const at = pressureUnit(other.p);
@@ -126,7 +144,8 @@ function text(m: Medium, kind: AskedKind, asked: Asked, local: Local, notes: rea
   });
   return [
     terminal.boundaryTitle(words.substance(m.substance.id), name),
-    ...table(rows, terminal.notDefined, heads),
+    ...table(rows, heads),
+    ...(rows.some(({ cells }) => cells.includes(null)) ? [terminal.notDefined] : []),
     ...also,
     ...notes,
     terminal.basis(words.basis[record.basis], record.source),
@@ -168,11 +187,19 @@ async function fromFile(
   asJson: boolean,
 ): Promise<Answer> {
   const { columns, rows } = await readPoints(path, 'one');
-  const [[given, options]] = [...columns] as [[('T' | 'p'), ParseOptions]];
+  const [[given, options]] = [...columns] as [['T' | 'p', ParseOptions]];
   const asked: Asked[] = [];
   for (const { line, cells } of rows)
     asked.push(
-      await ask(m, kind, given, cells[given] ?? '', local, words.terminal.place(path, line), options),
+      await ask(
+        m,
+        kind,
+        given,
+        cells[given] ?? '',
+        local,
+        words.terminal.place(path, line),
+        options,
+      ),
     );
   const records = asked.map(({ record }) => record);
   const notes = pressureNotes(

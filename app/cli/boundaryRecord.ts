@@ -58,7 +58,11 @@ function solidSide(m: Medium, form: string | null, side: PhaseState): SolidSide 
   return { name: form, rho, h, s, cp };
 }
 
-function record(m: Medium, curve: BoundaryCurve, at: { T: number } | { p: number }): BoundaryRecord {
+function record(
+  m: Medium,
+  curve: BoundaryCurve,
+  at: { T: number } | { p: number },
+): BoundaryRecord {
   const point = 'T' in at ? curve.atTemperature(at.T) : curve.atPressure(at.p);
   const [dense, thin] = point.sides as readonly [PhaseState, PhaseState];
   const sides = {

@@ -26,9 +26,7 @@ async function sheetIn(path: string): Promise<Sheet> {
   const read = readSheet(data);
   if (!read.ok) {
     const [first, ...others] = read.issues;
-    throw new Refusal(
-      `${path}: ${words.sheetIssue(first!)}${terminal.moreIssues(others.length)}`,
-    );
+    throw new Refusal(`${path}: ${words.sheetIssue(first!)}${terminal.moreIssues(others.length)}`);
   }
   return read.sheet;
 }

@@ -45,9 +45,7 @@ export function boundaryName(m: Medium, id: string): string {
 async function sentence(error: unknown, { units, medium }: Context): Promise<string | null> {
   if (error instanceof Refusal) return error.message;
   if (error instanceof ReadingError) return words.reading(error.issue);
-  if (
-    !(error instanceof OutOfRange || error instanceof Undetermined || error instanceof Unknown)
-  )
+  if (!(error instanceof OutOfRange || error instanceof Undetermined || error instanceof Unknown))
     return null;
   // Only a refusal needs the sheet's part of core, which takes its time to load.
   const { problemOf } = await import('../../core/sheet/evaluate.ts');

@@ -106,16 +106,18 @@ function text(
     })),
   ];
   const of =
-    record.phase === 'solid' ? (solid === null ? null : m.solids.get(solid)?.equation) : m.substance.fluid;
+    record.phase === 'solid'
+      ? solid === null
+        ? null
+        : m.solids.get(solid)?.equation
+      : m.substance.fluid;
   return [
     `${words.substance(m.substance.id)}: ${words.phase(record.phase, solid)}`,
-    ...table(rows, terminal.notDefined),
+    ...table(rows),
+    ...(rows.some(({ cells }) => cells.includes(null)) ? [terminal.notDefined] : []),
     ...notes,
     ...(of
-      ? [
-          terminal.equations([of.formulation]),
-          terminal.referenceState[m.substance.referenceState],
-        ]
+      ? [terminal.equations([of.formulation]), terminal.referenceState[m.substance.referenceState]]
       : []),
     ...cautionLines(m, { ...record, solid: record.phase === 'solid' }, local.p),
     '',
@@ -175,9 +177,7 @@ async function fromFile(m: Medium, path: string, local: Local, asJson: boolean):
       const pressure = pressureGiven(cells.p ?? '', local, columns.get('p'));
       seen.kindWritten &&= pressure.kindWritten;
       seen.relative ||= pressure.relative;
-      records.push(
-        stateRecord(m, T.value, pressure.p, pressure.relative ? local.p : undefined),
-      );
+      records.push(stateRecord(m, T.value, pressure.p, pressure.relative ? local.p : undefined));
     } catch (error) {
       throw await refusalOf(error, {
         place: words.terminal.place(path, line),

@@ -1,9 +1,5 @@
 import { medium, type Medium } from '../../core/equilibrium/medium.ts';
-import {
-  catalogue,
-  findSubstances,
-  type CatalogueEntry,
-} from '../../core/substances/catalogue.ts';
+import { catalogue, findSubstances, type CatalogueEntry } from '../../core/substances/catalogue.ts';
 import { en as words } from '../words/en.ts';
 import { Refusal } from './refusal.ts';
 

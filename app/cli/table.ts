@@ -14,17 +14,13 @@ const split = (text: string): readonly [string, string] => {
   return at < 0 || !isNumber(text) ? [text, ''] : [text.slice(0, at), text.slice(at)];
 };
 
-/** Lines of a table: labels left, numbers on their decimal point, units after; `none` for null. */
-export function table(
-  rows: readonly TableRow[],
-  none: string,
-  heads?: readonly string[],
-): readonly string[] {
+/** Lines of a table: labels left, numbers on their decimal point, units after; a dash for null. */
+export function table(rows: readonly TableRow[], heads?: readonly string[]): readonly string[] {
   const columns = Math.max(...rows.map(({ cells }) => cells.length));
   const label = Math.max(...rows.map((row) => width(row.label)));
   const aligned: string[][] = rows.map(() => []);
   for (let k = 0; k < columns; k++) {
-    const cells = rows.map((row) => row.cells[k] ?? none);
+    const cells = rows.map((row) => row.cells[k] ?? '—');
     const numbers = cells.filter(isNumber).map(split);
     const whole = Math.max(1, ...numbers.map(([a]) => width(a)));
     const rest = Math.max(0, ...numbers.map(([, b]) => width(b)));

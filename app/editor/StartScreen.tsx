@@ -7,6 +7,7 @@ import type { Kept, Shelf } from '../store/shelf.ts';
 import { newKey, openFile } from './actions.ts';
 import { useAppStore, useWords } from './context.ts';
 import { demos, demoText } from './demos.ts';
+import { NewMap } from './NewMap.tsx';
 
 /** A demo sheet as a live picture. */
 function Demo({ name }: { readonly name: string }) {
@@ -62,6 +63,7 @@ export function StartScreen({ shelf }: { readonly shelf: Shelf }) {
   return (
     <main className="start">
       <h1>{e.tool}</h1>
+      <NewMap />
       {kept.length > 0 && (
         <section>
           <h2>{e.keptSheets}</h2>

@@ -1,5 +1,5 @@
 import type { StateItem } from '../../core/sheet/schema.ts';
-import { parseReading, type Reading, type UnitId } from '../../core/units/index.ts';
+import { parseReading, type Reading } from '../../core/units/index.ts';
 import type { Figure } from '../figure/figure.ts';
 import { cornersOf } from '../figure/layout/box.ts';
 import { anchorOf } from '../figure/layout/moved.ts';
@@ -53,7 +53,7 @@ function movedState(item: StateItem, figure: Figure, T: number, p: number): Stat
   if (item.p !== undefined) {
     const old = unitOf(item.p, 'pressure');
     const kind = old.kind === undefined || old.kind === 'unstated' ? sheet.pressureKind : old.kind;
-    out.p = pressureReading(p, old.unit as UnitId, kind, local, steps.p).text;
+    out.p = pressureReading(p, old.unit, kind, local, steps.p).text;
   }
   return out;
 }

@@ -1,3 +1,4 @@
+import type { Results } from '../../core/sheet/results.ts';
 import type { Sheet } from '../../core/sheet/schema.ts';
 import { withChanges, type Answer, type Request } from '../worker/messages.ts';
 import type { AppStore } from './index.ts';
@@ -20,7 +21,7 @@ const mostRestarts = 2;
 export function keepEvaluated(
   store: AppStore,
   startWorker: () => WorkerLike,
-  evaluateHere: (sheet: Sheet) => Promise<import('../../core/sheet/results.ts').Results>,
+  evaluateHere: (sheet: Sheet) => Promise<Results>,
   say: { lostWorker: string; failed: (message: string) => string },
 ): () => void {
   let worker: WorkerLike | null = null;

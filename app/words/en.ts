@@ -2,6 +2,10 @@ import type { CautionCode } from '../../core/cautions/caution.ts';
 import type { BoundaryKind } from '../../core/map/boundary.ts';
 import type { Direction, NoMargin } from '../../core/map/margins.ts';
 import type { PhaseName } from '../../core/equilibrium/phase.ts';
+import type { SheetIssue } from '../../core/sheet/read.ts';
+import type { StateProblem } from '../../core/sheet/results.ts';
+import type { ReferenceState } from '../../core/substances/substance.ts';
+import { format, type Quantity, type ReadingIssue } from '../../core/units/index.ts';
 import type { Sentence, Slot } from './sentence.ts';
 
 /** Names of substances as the map writes them: of the fluid phases and of the solid. */
@@ -14,6 +18,362 @@ const substances: Readonly<
     liquid: 'liquid carbon dioxide',
     vapour: 'carbon dioxide gas',
   },
+};
+
+const quantityNames: Readonly<Record<Quantity, string>> = {
+  temperature: 'temperature',
+  temperatureDifference: 'temperature difference',
+  pressure: 'pressure',
+  pressureDifference: 'pressure difference',
+  density: 'density',
+  specificEnergy: 'specific energy',
+  specificEntropy: 'specific entropy',
+  heatCapacity: 'heat capacity',
+  speed: 'speed',
+  time: 'time',
+  temperatureRate: 'rate of temperature',
+  pressureRate: 'rate of pressure',
+  length: 'length',
+  altitude: 'altitude',
+  fraction: 'fraction',
+  mass: 'mass',
+};
+
+/** What a person typed, short enough to stand inside a sentence. */
+const quote = (text: string): string =>
+  `“${text.trim().length > 60 ? `${text.trim().slice(0, 60)}…` : text.trim()}”`;
+
+/** "a, b or c"; only the first eight of many. */
+const oneOf = (list: readonly string[]): string =>
+  list.length > 8
+    ? `${list.slice(0, 8).join(', ')} or another`
+    : list.length > 1
+      ? `${list.slice(0, -1).join(', ')} or ${list.at(-1)!}`
+      : (list[0] ?? '');
+
+const kPa = (p: number): string => format(p, 'kPa', { kind: 'absolute', decimals: 3 });
+
+/** Why a reading cannot be taken. */
+function readingSentence(issue: ReadingIssue): string {
+  switch (issue.code) {
+    case 'empty':
+      return `No ${quantityNames[issue.quantity]} is given.`;
+    case 'tooLong':
+      return `${issue.length} characters are too many for a ${quantityNames[issue.quantity]}: at most ${issue.limit}.`;
+    case 'notANumber':
+      return `${quote(issue.text)} is no ${quantityNames[issue.quantity]}: it does not start with a number that can be read.`;
+    case 'ambiguousNumber':
+      return `${quote(issue.text)} can mean ${issue.readings[0].text} or ${issue.readings[1].text}: write the number with a decimal point.`;
+    case 'missingUnit':
+      return `${quote(issue.text)} has no unit: write ${oneOf(issue.expected)}.`;
+    case 'unknownUnit':
+      return `${quote(issue.unit)} is no unit of ${quantityNames[issue.quantity]}: write ${oneOf(issue.expected)}.`;
+    case 'wrongQuantity':
+      return `${quote(issue.text)} is no ${quantityNames[issue.quantity]}: ${issue.unit} measures ${oneOf(issue.found.map((q) => quantityNames[q]))}.`;
+    case 'belowMinimum':
+      return issue.quantity === 'temperature'
+        ? `${quote(issue.text)} lies below absolute zero.`
+        : `${quote(issue.text)} is below zero: there is no such ${quantityNames[issue.quantity]}.`;
+    case 'negativeVacuum':
+      return `${quote(issue.text)}: a vacuum is counted downwards from the local atmosphere and takes no minus sign.`;
+    case 'unstatedKind':
+      return `${quote(issue.reading.text)} is neither gauge nor absolute: write (g) or (a) after the unit.`;
+    case 'belowZeroAbsolute':
+      return issue.kind === 'absolute'
+        ? `${quote(issue.reading.text)} is no pressure that a state can have: it must be above zero.`
+        : `${quote(issue.reading.text)} would be ${kPa(issue.value)} where the local atmosphere is ${kPa(issue.local)}: there is no such pressure.`;
+    case 'notThatQuantity':
+      return `${quote(issue.reading.text)} is no ${quantityNames[issue.quantity]} but a ${quantityNames[issue.reading.quantity]}.`;
+    case 'noSpan':
+      return `${quote(issue.low.text)} to ${quote(issue.high.text)} is no scale: its ends must differ and count from the same zero.`;
+  }
+}
+
+/** What is wrong at a place of a sheet; the place is named first. */
+function sheetIssueSentence(issue: SheetIssue): string {
+  const at = issue.place === '' ? '' : `${issue.place}: `;
+  switch (issue.code) {
+    case 'notASheet':
+      return 'This is not a sheet.';
+    case 'newerVersion':
+      return `This sheet has version ${issue.version}; this program reads version 1. A newer program opens it.`;
+    case 'shape':
+      return `${at}${issue.expected} belongs here, not ${quote(issue.received)}.`;
+    case 'reading':
+      return `${at}${readingSentence(issue.issue)}`;
+    case 'unknownId':
+      return `${at}the sheet has no ${issue.of} with the id ${quote(issue.given)}.`;
+    case 'twice':
+      return `${at}the id ${quote(issue.given)} stands twice.`;
+    case 'givens':
+      return `${at}a state takes two givens of temperature, pressure and vapour fraction; ${issue.given.length === 0 ? 'none is here' : `here ${issue.given.length === 1 ? 'is' : 'are'} ${issue.given.join(', ')}`}.`;
+    case 'unit':
+      return `${at}${quote(issue.given)} is no unit of pressure.`;
+    case 'emptyRange':
+      return `${at}the range is empty: its upper end must lie above its lower end, and a logarithmic one above zero.`;
+    case 'tooLarge':
+      return `${at}this is larger than a sheet may be.`;
+  }
+}
+
+/** How a problem is told where the substance and the units of the givens are at hand. */
+interface ProblemTold {
+  /** A line's name from its id. */
+  readonly boundary: (id: string) => string;
+  /** An SI value with its unit. */
+  readonly value: (value: number, quantity: string, unit: string) => string;
+}
+
+const problemTold: ProblemTold = {
+  boundary: (id) =>
+    id.startsWith('melting')
+      ? 'melting line'
+      : id.startsWith('sublimation')
+        ? 'sublimation line'
+        : 'boiling line',
+  value: (value, quantity, unit) =>
+    quantity === 'T'
+      ? format(value, '°C', { decimals: 2 })
+      : quantity === 'p'
+        ? format(value, value < 1e6 ? 'kPa' : 'MPa', { kind: 'absolute', digits: 5 })
+        : `${Number(value.toPrecision(6))}${unit === '1' ? '' : ` ${unit}`}`,
+};
+
+const problemQuantities: Readonly<Record<string, string>> = {
+  T: 'The temperature',
+  p: 'The pressure',
+  altitude: 'The altitude',
+  pressure: 'The pressure',
+  'vapour fraction': 'The vapour fraction',
+};
+
+/** Why a state has no result. */
+function problemSentence(problem: StateProblem, told: ProblemTold): string {
+  switch (problem.code) {
+    case 'outOfRange': {
+      const { quantity, unit, source } = problem;
+      const [value, min, max] = [problem.value, problem.min, problem.max].map((x) =>
+        told.value(x, quantity, unit),
+      );
+      return `${problemQuantities[quantity] ?? quantity} ${value} lies outside the range from ${min} to ${max} (${source}).`;
+    }
+    case 'onBoundary':
+      return `Temperature and pressure lie on the ${told.boundary(problem.boundary)}, where they do not fix the state: give a ${problem.needs}.`;
+    case 'unknown':
+      return `The phase is not known: ${problem.reason}.`;
+  }
+}
+
+const how = 'Run it as: npm run -s simmerline -- <command> …';
+const pressureHelp = `A pressure without a kind is absolute. Gauge and vacuum readings, such as "2.5 bar(g)",
+"35 psig" or "20 inHg vac", count from the local atmosphere, which --altitude
+(ISO 2533) or --barometer gives; without either it is 101.325 kPa.`;
+const fileHelp = `A file has a header on line 1 with units in brackets, such as "T [degC]" or
+"p [bar(g)]", SI where none (K, Pa absolute), and a point on each further line.
+Columns may be parted by comma, semicolon or tab; beside a semicolon or a tab
+commas may be decimal. One bad line refuses the whole file.`;
+const referenceHelp = `Zero of h, u and s:
+  water           u = s = 0 for saturated liquid at the triple point (IAPWS)
+  carbon dioxide  h = s = 0 for the ideal gas at 298.15 K and 101.325 kPa`;
+const exitHelp = `Exit status: 0 done, 2 refused with one line on standard error that says why,
+1 a fault of the program itself.`;
+
+/** Help and texts of the terminal tool. */
+const terminal = {
+  help: {
+    general: `Simmerline: states, boundaries and figures of pure substances from published
+equations of state.
+
+  state <substance> --T … --p …            phase and properties at a point
+  boundary <substance> <line> --T … | --p … both sides of a boundary
+  figure <sheet.json> <out.svg>            the figure of a sheet
+  substances                               what there is
+  help [command]                           this, or more about a command
+  --version                                the version
+
+${how}
+Put readings and names of several words in quotes: --T "-20 °C".
+${pressureHelp}
+
+${referenceHelp}
+
+${exitHelp}
+`,
+    state: `state <substance> --T "…" --p "…" [--altitude "…" | --barometer "…"] [--json]
+state <substance> --from points.csv [--altitude "…" | --barometer "…"] [--json]
+
+Phase and properties at a temperature and a pressure. The substance answers to its
+id, name, formula, CAS number or ISO 817 number.
+
+  --T "121.1 °C"         temperature, with its unit
+  --p "2.5 bar(g)"       pressure, with its unit
+  --from points.csv      many points from the columns T and p, in any order
+  --altitude "1480 m"    where the gauge is read
+  --barometer "84.8 kPa" or what a barometer shows there (absolute)
+  --json                 JSON in SI: T, p, phase, rho, h, s, u, cp, cv, w; null where the
+                         sources define nothing; solid and its form for a solid; atmosphere
+                         (Pa) where a gauge or vacuum reading was given
+
+Without --json a point gives a table and a file gives CSV in SI.
+${fileHelp}
+${pressureHelp}
+Closer to a boundary than one part in 10⁹, temperature and pressure do not fix the
+state: it is refused, and the boundary named.
+
+${referenceHelp}
+
+${exitHelp}
+`,
+    boundary: `boundary <substance> saturation|melting|sublimation --T "…" | --p "…" | --from points.csv
+         [--altitude "…" | --barometer "…"] [--json]
+
+A boundary at a temperature or at a pressure, with the properties of both sides.
+
+  --T "-20 °C"           temperature, with its unit
+  --p "2.5 bar(g)"       pressure, with its unit
+  --from points.csv      many points from one column, T or p
+  --altitude "1480 m"    where the gauge is read
+  --barometer "84.8 kPa" or what a barometer shows there (absolute)
+  --json                 JSON in SI: T, p, both sides by name, basis and source
+
+Where one temperature meets several melting lines, the lowest pressure is given and
+the others after it (in JSON as also). The basis is equilibrium (equal Gibbs energies),
+correlation (a published equation for the line alone) or estimate.
+${fileHelp}
+${pressureHelp}
+
+${referenceHelp}
+
+${exitHelp}
+`,
+    figure: `figure <sheet.json> <out.svg> [--view id] [--without-sheet]
+
+Draws the figure of a sheet, as the page draws it. The sheet is read from JSON or
+from an SVG that carries it. The file is written whole or not at all.
+
+  --view id              another view than the first
+  --without-sheet        leave the sheet out of the file, for passing it outside
+
+${exitHelp}
+`,
+    substances: `substances
+
+Every substance with its id, formula, CAS number, ISO 817 number and names.
+`,
+    help: `help [command]
+
+General help, or help on one command.
+`,
+  },
+  refused: (message: string): string => `simmerline: ${message}`,
+  fault: (detail: string): string => `simmerline: a fault of the program itself: ${detail}`,
+  noCommand: (names: readonly string[]): string =>
+    `no command is given: ${oneOf(names)}; help says more.`,
+  unknownCommand: (word: string, names: readonly string[]): string =>
+    `${quote(word)} is no command: ${oneOf(names)}.`,
+  unknownOption: (option: string, known: readonly string[]): string =>
+    `${quote(option)} is no option here${known.length > 0 ? `: ${oneOf(known)}` : ''}.`,
+  twice: (option: string): string => `${option} is given twice.`,
+  noValue: (option: string): string => `${option} takes no value.`,
+  valueMissing: (option: string): string => `${option} has no value.`,
+  tooMany: (word: string): string =>
+    `${quote(word)} is one word too many: put readings and names of several words in quotes.`,
+  eitherOf: (options: readonly string[]): string =>
+    `give either ${options.join(' or ')}, not both.`,
+  stateNeeds: 'a state needs --T and --p, or --from with a file.',
+  boundaryNeeds: 'a boundary needs one of --T, --p and --from.',
+  figureNeeds: 'a figure needs a sheet and the file to write: figure <sheet.json> <out.svg>.',
+  substanceMissing: (all: readonly string[]): string =>
+    `no substance is given: ${oneOf(all)}; the command substances says more.`,
+  unknownSubstance: (word: string, all: readonly string[]): string =>
+    `there is no substance ${quote(word)}; there is ${all.join(', ')}.`,
+  whichSubstance: (word: string, candidates: readonly string[]): string =>
+    `${quote(word)} does not say which substance: ${candidates.length > 1 ? 'one of ' : ''}${candidates.join(', ')}?`,
+  unknownKind: (word: string | undefined, kinds: readonly string[]): string =>
+    word === undefined
+      ? `no boundary is given: ${oneOf(kinds)}.`
+      : `${quote(word)} is no boundary: ${oneOf(kinds)}.`,
+  noLine: (substance: string, kind: string, reason: string | null): string =>
+    `no ${kind} line of ${substance} is known${reason === null ? '' : `: ${reason}`}.`,
+  bothSides: (substance: string, kind: string): string =>
+    `The command boundary ${substance} ${kind} gives both sides.`,
+  barometerKind: 'a barometer shows an absolute pressure.',
+  absolute: 'A pressure without a kind is absolute.',
+  standardAtmosphere:
+    'Gauge and vacuum readings without a site count from a local atmosphere of 101.325 kPa.',
+
+  place: (file: string, line: number): string => `${file}, line ${line}`,
+  cannotRead: (file: string, code: string): string =>
+    code === 'ENOENT'
+      ? `there is no file ${quote(file)}.`
+      : code === 'EISDIR'
+        ? `${quote(file)} is a folder, not a file.`
+        : `${quote(file)} cannot be read (${code}).`,
+  cannotWrite: (file: string, code: string): string =>
+    code === 'ENOENT'
+      ? `${quote(file)} cannot be written: there is no such folder.`
+      : code === 'EISDIR'
+        ? `${quote(file)} cannot be written: it is a folder.`
+        : `${quote(file)} cannot be written (${code}).`,
+  emptyFile: (file: string): string => `${file} is empty.`,
+  noPoints: (file: string): string => `${file} has a header and no points.`,
+  brokenQuotes: (file: string, line: number): string =>
+    `${file}, line ${line}: a quoted cell is not closed or has text behind its quotes.`,
+  columnTwice: (file: string, column: string): string =>
+    `${file}, line 1: the column ${column} stands twice.`,
+  columnsMissing: (file: string, missing: readonly string[]): string =>
+    `${file}, line 1: there is no column ${missing.join(' and no column ')}; the header names T and p, with units in brackets.`,
+  oneColumn: (file: string, found: number): string =>
+    found === 0
+      ? `${file}, line 1: there is no column T or p.`
+      : `${file}, line 1: one column is wanted, T or p, and there are both.`,
+  unknownExtension: (file: string, known: readonly string[]): string =>
+    `${quote(file)} is no kind of file that can be written: its name must end in ${oneOf(known)}.`,
+  unknownView: (word: string, views: readonly string[]): string =>
+    `the sheet has no view ${quote(word)}: ${oneOf(views)}.`,
+  sheetFile: {
+    noSheet: 'this SVG carries no sheet.',
+    tooLarge: 'this file is larger than a sheet may be.',
+    malformed: 'this file is damaged: no sheet can be read from it.',
+    noJson: 'this file is neither JSON nor an SVG that carries a sheet.',
+  },
+  moreIssues: (count: number): string => (count > 0 ? ` And ${count} more.` : ''),
+  figureWritten: (file: string, width: number, height: number, carries: boolean): string =>
+    `${file}: ${Number(width.toFixed(1))} mm × ${Number(height.toFixed(1))} mm${carries ? ', carries its sheet' : ', without its sheet'}.`,
+  unplaced: (count: number): string =>
+    `${count} label${count > 1 ? 's' : ''} found no room on the figure.`,
+
+  substanceColumns: ['id', 'formula', 'CAS', 'ISO 817', 'names'],
+  symbols: {
+    T: 'temperature T',
+    p: 'pressure p',
+    atmosphere: 'local atmosphere',
+    rho: 'density ρ',
+    h: 'enthalpy h',
+    s: 'entropy s',
+    u: 'internal energy u',
+    cp: 'heat capacity cp',
+    cv: 'heat capacity cv',
+    w: 'speed of sound w',
+  },
+  notDefined: '—: not defined by the sources.',
+  equations: (list: readonly string[]): string => `Equations: ${list.join('; ')}.`,
+  referenceState: {
+    'liquid at the triple point': 'Zero: u = s = 0 for saturated liquid at the triple point.',
+    'ideal gas at 298.15 K and 101.325 kPa':
+      'Zero: h = s = 0 for the ideal gas at 298.15 K and 101.325 kPa.',
+    'liquid at 273.15 K: 200 kJ/kg, 1 kJ/(kg K)':
+      'Zero: h = 200 kJ/kg and s = 1 kJ/(kg·K) for saturated liquid at 273.15 K.',
+    'liquid at the normal boiling point':
+      'Zero: h = s = 0 for saturated liquid at the normal boiling point.',
+    'as published': 'Zero of h, u and s as published.',
+  } satisfies Record<ReferenceState, string>,
+  boundaryTitle: (substance: string, line: string): string => `${substance}: ${line}`,
+  alsoMelts: (form: string, p: string): string =>
+    `Also melts at this temperature: ${form} at ${p}.`,
+  alsoInJson: (count: number): string =>
+    `${count} temperature${count > 1 ? 's meet' : ' meets'} further melting lines at higher pressures: --json lists them.`,
+  basis: (basis: string, source: string): string => `Basis: ${basis} (${source}).`,
 };
 
 /** English. */
@@ -247,6 +607,12 @@ export const en = {
     pageWidth: 'page width',
     pageHeight: 'page height',
     printColours: 'print colours',
+    sites: 'Where readings are taken',
+    addSite: 'Add a site',
+    newSite: (n: number): string => `Site ${n}`,
+    barometerRange: 'A barometer reads an absolute pressure between 20 and 120 kPa.',
+    newMap: 'A new map',
+    drawIt: 'Draw it',
     autosave: {
       notKept:
         'This device could not keep the sheet (its storage is full or closed). Your work is still here: save it as a file.',
@@ -256,6 +622,112 @@ export const en = {
         'Another tab changed this sheet at the same time. Both are kept; this tab goes on with a copy of its own.',
     },
   },
+
+  /** A site as a sentence: where it is and how well its instruments tell. */
+  siteSentence: (
+    site: {
+      readonly name: string;
+      readonly altitude: string;
+      readonly barometer: string;
+      readonly barometerError: string;
+      readonly gaugeClass: string;
+      readonly low: string | null;
+      readonly high: string | null;
+      readonly probe: string;
+      readonly local: string;
+    },
+    classes: readonly string[],
+  ): Sentence => {
+    const of = (what: string): string => `${what} at ${site.name}`;
+    const gauge: Sentence =
+      site.low === null
+        ? []
+        : [
+            ', from ',
+            {
+              field: 'low',
+              text: site.low,
+              name: of('low end of the gauge'),
+              quantity: 'pressure',
+            },
+            ' to ',
+            {
+              field: 'high',
+              text: site.high ?? '',
+              name: of('high end of the gauge'),
+              quantity: 'pressure',
+            },
+          ];
+    return [
+      { field: 'name', text: site.name, name: 'name of the site', hint: 'name' },
+      ', ',
+      {
+        field: 'altitude',
+        text: site.altitude,
+        name: of('altitude'),
+        quantity: 'altitude',
+        hint: 'altitude',
+      },
+      ', barometer ',
+      {
+        field: 'barometer',
+        text: site.barometer,
+        name: of('barometer'),
+        quantity: 'pressure',
+        hint: 'not read',
+      },
+      `: air at ${site.local} ± `,
+      {
+        field: 'barometerError',
+        text: site.barometerError,
+        name: of('error of the air pressure'),
+        quantity: 'pressureDifference',
+        hint: 'not said',
+      },
+      '. Gauge ',
+      {
+        field: 'class',
+        text: site.gaugeClass,
+        name: of('gauge class'),
+        choices: [
+          { value: 'none', label: 'class not said' },
+          ...classes.map((c) => ({ value: c, label: `class ${c}` })),
+        ],
+      },
+      ...gauge,
+      '. Probe ± ',
+      {
+        field: 'probe',
+        text: site.probe,
+        name: of('error of the probe'),
+        quantity: 'temperatureDifference',
+        hint: 'not said',
+      },
+      '.',
+    ];
+  },
+
+  /** What a blank start asks, in one sentence. */
+  startSentence: (
+    start: { readonly substance: string; readonly where: string; readonly kind: string },
+    list: readonly { readonly value: string; readonly label: string }[],
+  ): Sentence => [
+    'A map of ',
+    { field: 'substance', text: start.substance, name: 'substance', choices: list },
+    ' for a plant at ',
+    { field: 'where', text: start.where, name: 'altitude or barometer of the plant', hint: '0 m' },
+    ', whose pressures are read as ',
+    {
+      field: 'kind',
+      text: start.kind,
+      name: 'kind of pressure',
+      choices: [
+        { value: 'gauge', label: 'gauge' },
+        { value: 'absolute', label: 'absolute' },
+      ],
+    },
+    '.',
+  ],
 
   /** A state as a sentence with figures in it. */
   stateSentence: (
@@ -283,6 +755,13 @@ export const en = {
     if (item.vapourFraction === undefined) return ['At ', T, ' and ', p];
     return ['On the boiling line at ', item.T === undefined ? p : T, ', ', x, ' vapour'];
   },
+
+  quantity: quantityNames,
+  reading: readingSentence,
+  sheetIssue: sheetIssueSentence,
+  problem: (problem: StateProblem, told: ProblemTold = problemTold): string =>
+    problemSentence(problem, told),
+  terminal,
 };
 
 export type Words = typeof en;
