@@ -13,10 +13,13 @@ export interface Answer {
 /** Exit statuses, as the help says them. */
 export const exitStatus = { done: 0, fault: 1, refused: 2 } as const;
 
-/** One line for a terminal: line breaks and control characters of quoted text become spaces. */
+/**
+ * One line for a terminal: line breaks and control characters of quoted text become spaces, as do
+ * non-breaking ones.
+ */
 export function oneLine(text: string): string {
   return text
-    .replace(/[\p{Cc}\p{Zl}\p{Zp}\p{Bidi_Control}]+/gu, ' ')
+    .replace(/[\p{Cc}\p{Zl}\p{Zp}\p{Bidi_Control}\u00a0]+/gu, ' ')
     .replace(/ {2,}/g, ' ')
     .trim();
 }

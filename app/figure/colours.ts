@@ -26,7 +26,7 @@ export const printColours: Readonly<Record<'colour' | 'grey' | 'black', Colours>
       faint: { solid: '#f1f4f7', liquid: '#eef5f4', vapour: '#fdfaf2', supercritical: '#f6f3f7' },
       full: { solid: '#e7edf2', liquid: '#dfeeed', vapour: '#fbf5e8', supercritical: '#efebf2' },
     },
-    own: ['#b3401f', '#0b5d86', '#5d4a8c', '#2f6b3a'],
+    own: ['#b3401f', '#0b5d86', '#543c9c', '#0c3c18'],
   },
   grey: {
     ink: '#222222',
@@ -37,7 +37,7 @@ export const printColours: Readonly<Record<'colour' | 'grey' | 'black', Colours>
       faint: { solid: '#eeeeee', liquid: '#f6f6f6', vapour: null, supercritical: '#f2f2f2' },
       full: { solid: '#e0e0e0', liquid: '#eeeeee', vapour: '#fafafa', supercritical: '#e7e7e7' },
     },
-    own: ['#222222', '#555555', '#333333', '#666666'],
+    own: ['#222222', '#555555', '#333333', '#5e5e5e'],
   },
   black: {
     ink: '#000000',
