@@ -1,5 +1,6 @@
 import { useEffect } from 'react';
 import type { Shelf } from '../store/shelf.ts';
+import { removed } from '../store/pathEdits.ts';
 import { openFile } from './actions.ts';
 import { Bench } from './Bench.tsx';
 import { useApp, useAppStore, useWords } from './context.ts';
@@ -25,12 +26,8 @@ function usePageHands(): void {
       } else if (command && key === 'y' && !typing) store.getState().redo();
       else if ((event.key === 'Delete' || event.key === 'Backspace') && !typing) {
         const { selected, sheet } = store.getState();
-        const item = sheet?.items.find(({ id }) => id === selected);
-        if (!item) return;
-        store.getState().edit(`remove ${item.tag}`, (s) => ({
-          ...s,
-          items: s.items.filter(({ id }) => id !== item.id),
-        }));
+        if (!sheet || selected === null || removed(sheet, selected) === sheet) return;
+        store.getState().edit('remove', (s) => removed(s, selected));
       } else return;
       event.preventDefault();
     };

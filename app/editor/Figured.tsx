@@ -15,7 +15,7 @@ function Figure({ slot, commit }: { readonly slot: Slot; readonly commit: Commit
   if (slot.choices) {
     return (
       <select
-        className="figure"
+        className={slot.quiet ? 'figure caret' : 'figure'}
         aria-label={slot.name}
         value={slot.text}
         onChange={(e) => void commit(slot.field, e.target.value)}

@@ -1,5 +1,35 @@
+import { format } from '../../core/units/index.ts';
+import type { StepResult } from '../../core/sheet/results.ts';
+import { removed } from '../store/pathEdits.ts';
+import type { Words } from '../words/en.ts';
 import { useApp, useAppStore, useWords } from './context.ts';
 import { stateFacts } from './stateFacts.ts';
+
+/** What a step costs and meets, in rows. */
+function stepFacts(step: StepResult, words: Words): readonly (readonly [string, string])[] {
+  const e = words.editor;
+  const { decimal } = words;
+  const energy = (value: number): string => format(value, 'kJ/kg', { digits: 4, decimal });
+  return [
+    ...step.encounters.map((x): [string, string] => [
+      e.meets,
+      words.encounterAt(words.encounter(x), format(x.T, '°C', { decimals: 1, decimal })),
+    ]),
+    [
+      e.heat,
+      step.heat === null
+        ? step.heatAbsent
+          ? words.heatAbsent(step.heatAbsent)
+          : ''
+        : energy(step.heat),
+    ],
+    ...(step.work === null ? [] : [[e.work, energy(step.work)] as const]),
+    ...(step.lost?.mass
+      ? [[e.left, format(step.lost.mass, '%', { digits: 3, decimal })] as const]
+      : []),
+    ...(step.problem ? [[e.trouble, words.stepProblem(step.problem)] as const] : []),
+  ];
+}
 
 /** What is selected, and what is true of it. */
 export function Selected() {
@@ -9,8 +39,8 @@ export function Selected() {
   const sheet = useApp((s) => s.sheet)!;
   const results = useApp((s) => s.results);
   const selected = useApp((s) => s.selected);
-  const state = results?.states.find(({ id }) => id === selected);
-  const boundary = results?.maps[0]?.boundaries.find(({ id }) => id === selected);
+  if (!results || selected === null) return null;
+  const boundary = results.maps[0]?.boundaries.find(({ id }) => id === selected);
   if (boundary)
     return (
       <section aria-live="polite">
@@ -18,38 +48,49 @@ export function Selected() {
           {words.boundary(boundary.of, boundary.kind, boundary.form, { kind: false, line: true })}
         </h2>
         <dl>
-          <dt>{e.basis}</dt>
-          <dd>{words.basis[boundary.basis]}</dd>
-          <dt>{e.source}</dt>
-          <dd>{boundary.source}</dd>
+          <div>
+            <dt>{e.basis}</dt>
+            <dd>{words.basis[boundary.basis]}</dd>
+          </div>
+          <div>
+            <dt>{e.source}</dt>
+            <dd>{boundary.source}</dd>
+          </div>
         </dl>
       </section>
     );
-  if (!state) return null;
-  const local = results?.sites.find(({ id }) => id === state.site)?.local ?? 101325;
+  const onPaths = results.paths.flatMap((path) => path.states);
+  const state = [...results.states, ...onPaths].find(({ id }) => id === selected);
+  const step = results.paths.flatMap((path) => path.steps).find(({ id }) => id === selected);
+  if (!state && !step) return null;
+  const local = results.sites.find(({ id }) => id === state?.site)?.local ?? 101325;
+  const facts = [
+    ...(state ? stateFacts(state, sheet.views[0]!, local, words) : []),
+    ...(step ? stepFacts(step, words) : []),
+  ];
+  const removable = removed(sheet, selected) !== sheet;
   return (
     <section aria-live="polite">
-      <h2>{e.selected(state.tag, state.name)}</h2>
+      <h2>{state ? e.selected(state.tag, state.name) : e.step}</h2>
       <dl>
-        {stateFacts(state, sheet.views[0]!, local, words).map(([name, text]) => (
-          <div key={name + text}>
+        {facts.map(([name, text], i) => (
+          <div key={`${name}${i}`}>
             <dt>{name}</dt>
             <dd>{text}</dd>
           </div>
         ))}
       </dl>
-      <p className="actions">
-        <button
-          onClick={() =>
-            store.getState().edit(`remove ${state.tag}`, (s) => ({
-              ...s,
-              items: s.items.filter(({ id }) => id !== state.id),
-            }))
-          }
-        >
-          {e.remove}
-        </button>
-      </p>
+      {removable && (
+        <p className="actions">
+          <button
+            onClick={() =>
+              store.getState().edit(`remove ${state?.tag ?? e.step}`, (s) => removed(s, selected))
+            }
+          >
+            {e.remove}
+          </button>
+        </p>
+      )}
     </section>
   );
 }

@@ -1,5 +1,5 @@
 import { useEffect, useRef, type KeyboardEvent, type PointerEvent, type RefObject } from 'react';
-import type { UnitId } from '../../core/units/index.ts';
+import type { Reading, UnitId } from '../../core/units/index.ts';
 import type { View } from '../../core/sheet/schema.ts';
 import type { Figure } from '../figure/figure.ts';
 import { axesAt, panned, zoomed, type Ranges } from '../figure/gesture.ts';
@@ -7,6 +7,16 @@ import { pressureReading, temperatureReading, withView } from '../store/edits.ts
 import type { AppStore } from '../store/index.ts';
 import { useAppStore } from './context.ts';
 import { dragTarget, type Drag } from './drag.ts';
+
+/** The reading with the fewest digits that says the same number as the one written to `step`. */
+function shortest(write: (step: number) => Reading, step: number): string {
+  const full = write(step);
+  for (let s = step * 1e6; s > step; s /= 10) {
+    const short = write(s);
+    if (Math.abs(short.number - full.number) <= 1e-9 * Math.abs(full.number)) return short.text;
+  }
+  return full.text;
+}
 
 /** A view with axis ranges written as readings, to a thousandth of their span. */
 export function withRanges(view: View, { T, p }: Ranges, local: number): View {
@@ -19,9 +29,9 @@ export function withRanges(view: View, { T, p }: Ranges, local: number): View {
   const pressure = (value: number, step: number): string =>
     value <= 0
       ? `0 ${unit}(a)`
-      : pressureReading(value, unit as UnitId, shownKind, local, step).text;
+      : shortest((s) => pressureReading(value, unit as UnitId, shownKind, local, s), step);
   const temperature = (value: number): string =>
-    temperatureReading(value, view.temperature.unit, (T[1] - T[0]) / 1000).text;
+    shortest((s) => temperatureReading(value, view.temperature.unit, s), (T[1] - T[0]) / 1000);
   return {
     ...view,
     temperature: { ...view.temperature, range: [temperature(T[0]), temperature(T[1])] },

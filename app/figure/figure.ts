@@ -10,6 +10,8 @@ import { axes, grid } from './marks/axes.ts';
 import { beyond } from './marks/beyond.ts';
 import { boundaries } from './marks/boundaries.ts';
 import { conventions } from './marks/conventions.ts';
+import { encounters } from './marks/encounters.ts';
+import { paths } from './marks/paths.ts';
 import { points } from './marks/points.ts';
 import { regions } from './marks/regions.ts';
 import { states } from './marks/states.ts';
@@ -38,6 +40,8 @@ const marks = [
   applied(conventions),
   applied(boundaries),
   applied(points),
+  applied(paths),
+  applied(encounters),
   applied(states),
   applied(axes),
 ];
@@ -144,7 +148,10 @@ export function composeFigure(
       width: page.width,
       height: page.height,
       title: sheet.title,
-      description: words.description(words.substance(map.substance), results.states.length),
+      description: words.description(
+        words.substance(map.substance),
+        results.states.length + results.paths.reduce((n, p) => n + p.states.length, 0),
+      ),
       layers: sceneLayers,
       unplaced: placed.unplaced,
     },

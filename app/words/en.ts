@@ -2,10 +2,14 @@ import type { CautionCode } from '../../core/cautions/caution.ts';
 import type { BoundaryKind } from '../../core/map/boundary.ts';
 import type { Direction, NoMargin } from '../../core/map/margins.ts';
 import type { PhaseName } from '../../core/equilibrium/phase.ts';
+import type { Encounter } from '../../core/process/encounter.ts';
+import type { StepProblem } from '../../core/process/problem.ts';
+import type { HeatAbsent } from '../../core/process/outcome.ts';
 import type { SheetIssue } from '../../core/sheet/read.ts';
 import type { StateProblem } from '../../core/sheet/results.ts';
 import type { ReferenceState } from '../../core/substances/substance.ts';
 import { format, type Quantity, type ReadingIssue } from '../../core/units/index.ts';
+import type { Step } from '../../core/process/steps/index.ts';
 import type { Sentence, Slot } from './sentence.ts';
 
 /** Names of substances as the map writes them: of the fluid phases and of the solid. */
@@ -437,6 +441,9 @@ export const en = {
   cannotTell: (boundary: string): string =>
     `on or off the ${boundary}: cannot be told from these instruments`,
 
+  saturated: (phase: string): string => `saturated ${phase}`,
+  onThe: (line: string): string => `on the ${line}`,
+
   /** A margin in trade words: what happens and how far. */
   margin: (direction: Direction, kind: BoundaryKind, from: PhaseName, amount: string): string => {
     const happens: Record<BoundaryKind, string> = {
@@ -459,6 +466,96 @@ export const en = {
     'between solid forms': 'changes between solid forms are not in these equations',
     'not published': 'no boundary is published that way',
   } satisfies Record<NoMargin, string>,
+
+  /** What happens where a run meets a boundary. */
+  encounter: ({
+    code,
+    boundaryKind,
+    from,
+  }: Pick<Encounter, 'code' | 'boundaryKind' | 'from'>): string => {
+    const line: Record<BoundaryKind, string> = {
+      saturation: 'boiling line',
+      melting: 'melting line',
+      sublimation: 'sublimation line',
+      critical: 'critical point',
+    };
+    const state: Record<BoundaryKind, string> = {
+      saturation: from.phase === 'vapour' ? 'condensing' : 'boiling',
+      melting: from.phase === 'solid' ? 'melting' : 'freezing',
+      sublimation: from.phase === 'solid' ? 'subliming' : 'turning to solid',
+      critical: 'the critical point',
+    };
+    switch (code) {
+      case 'reaches':
+        return `reaches ${state[boundaryKind]}`;
+      case 'leaves':
+        return `leaves the ${line[boundaryKind]}`;
+      case 'touches':
+        return `touches the ${line[boundaryKind]}`;
+      case 'follows':
+        return `follows the ${line[boundaryKind]}`;
+      case 'deposits':
+        return 'turns to solid';
+      case 'passesAboveCritical':
+        return 'passes above the critical point';
+      default:
+        return code;
+    }
+  },
+  /** Why a step's heat is not told. */
+  heatAbsent: (why: HeatAbsent): string => {
+    switch (why.code) {
+      case 'noEquation':
+        return `no equation is published for ${
+          why.phase.phase === 'solid'
+            ? (why.phase.solid ?? 'this solid, whose form is not resolved')
+            : `the ${why.phase.phase} here`
+        }`;
+      case 'openFraction':
+        return why.at === 'end'
+          ? 'how much changes over is not said: give a fraction or a heat at the end'
+          : 'the fraction at the start of this step is not known';
+      case 'openMass':
+        return 'how much vapour has left before is not known';
+      case 'notReached':
+        return 'the step does not reach its end';
+    }
+  },
+
+  /** Why a step does not reach its end, and what to do. */
+  stepProblem: (problem: StepProblem): string => {
+    const line: Readonly<Record<string, string>> = {
+      saturation: 'boiling line',
+      melting: 'melting line',
+      sublimation: 'sublimation line',
+      critical: 'critical point',
+    };
+    switch (problem.code) {
+      case 'noBoundary': {
+        const kept =
+          problem.keeps === 'p'
+            ? format(problem.value, 'kPa', { digits: 4, kind: 'absolute' })
+            : format(problem.value, '°C', { digits: 4 });
+        return `no ${problem.boundary ? line[problem.boundary] : 'line'} is met at ${kept}: choose another end`;
+      }
+      case 'noSuchPhase':
+        return `no line with ${problem.fraction} is met here: end at a temperature or a pressure`;
+      case 'notOnBoundary':
+        return 'it does not start on a line: end the step before on one';
+      case 'nothingLeft':
+        return 'all of it has left as vapour';
+      case 'nothingCondensesBack':
+        return `the vapour has left and cannot condense back: give at least ${format(problem.least, '%', { digits: 3 })}`;
+      case 'heatRange':
+        return `that heat goes past the change of phase: give ${format(problem.least, 'kJ/kg', { digits: 4 })} to ${format(problem.most, 'kJ/kg', { digits: 4 })}`;
+      case 'reading':
+        return readingSentence(problem.issue);
+      case 'notRun':
+        return 'an earlier step does not reach its end';
+      default:
+        return problemSentence(problem, problemTold);
+    }
+  },
 
   /** One line inside the picture. */
   caution: {
@@ -542,6 +639,17 @@ export const en = {
     close: 'Close',
     dismiss: 'Dismiss',
     state: 'State',
+    heat: 'Heat',
+    clock: 'Clock',
+    meets: 'Meets',
+    work: 'Work',
+    left: 'Left as vapour',
+    trouble: 'Not reached',
+    step: 'Step',
+    addStep: 'Add a step',
+    addPath: 'Plan a run',
+    total: 'Whole run',
+    removeStep: (tag: string): string => `Remove the step to ${tag}`,
     whatIsDone: 'What is done',
     phase: 'Phase',
     next: 'Next boundary',
@@ -729,32 +837,99 @@ export const en = {
     '.',
   ],
 
-  /** A state as a sentence with figures in it. */
-  stateSentence: (
-    item: { readonly T?: string; readonly p?: string; readonly vapourFraction?: string },
-    tag: string,
-  ): Sentence => {
-    const T: Slot = {
-      field: 'T',
-      text: item.T ?? '',
-      name: `temperature of ${tag}`,
-      quantity: 'temperature',
-    };
-    const p: Slot = {
-      field: 'p',
-      text: item.p ?? '',
-      name: `pressure of ${tag}`,
-      quantity: 'pressure',
-    };
-    const x: Slot = {
-      field: 'vapourFraction',
-      text: item.vapourFraction ?? '',
-      name: `vapour fraction of ${tag}`,
-      quantity: 'fraction',
-    };
-    if (item.vapourFraction === undefined) return ['At ', T, ' and ', p];
-    return ['On the boiling line at ', item.T === undefined ? p : T, ', ', x, ' vapour'];
+  /** What a step is, as the run table's first words; told by what it does where that is known. */
+  stepKinds: (does: {
+    readonly T: number;
+    readonly p: number;
+  }): Readonly<Record<Step['kind'], string>> => ({
+    constantPressure:
+      does.T > 0
+        ? 'Heat at constant pressure'
+        : does.T < 0
+          ? 'Cool at constant pressure'
+          : 'Go at constant pressure',
+    constantTemperature:
+      does.p > 0
+        ? 'Raise the pressure at constant temperature'
+        : does.p < 0
+          ? 'Lower the pressure at constant temperature'
+          : 'Go at constant temperature',
+    ramp: 'Go in a straight line',
+    follow: 'Follow the line',
+    hold: 'Hold',
+  }),
+  endKinds: {
+    T: 'a temperature',
+    p: 'a pressure',
+    'T p': 'temperature and pressure',
+    saturation: 'the boiling line',
+    melting: 'the melting line',
+    sublimation: 'the sublimation line',
+    'T saturation': 'the boiling line at',
+    'p saturation': 'the boiling line at ',
+    vapourFraction: 'a share of vapour',
+    solidFraction: 'a share of solid',
+    none: 'as it is',
   },
+  /** The start of a path as a sentence. */
+  pathStart: (slots: readonly Slot[]): Sentence =>
+    slots.some(({ field }) => field.endsWith('Fraction'))
+      ? ['Start on the line at ', slots[0]!, ' with ', slots[1]!, ' vapour']
+      : ['Start at ', slots[0]!, ' and ', slots[1]!],
+  /** A step as a sentence: what it does, to where, how long, and what becomes of the steam. */
+  stepSentence: (parts: {
+    readonly kind: Slot;
+    readonly end: Slot | null;
+    readonly values: readonly Slot[];
+    readonly time: Slot;
+    readonly vapour: Slot | null;
+    readonly vapourName: string;
+  }): Sentence => [
+    parts.kind,
+    ...(parts.end && !(parts.kind.text === 'hold' && parts.values.length === 0)
+      ? [' to ', ...(parts.end.quiet ? [] : [parts.end])]
+      : []),
+    ...parts.values.flatMap((slot, i) => [i === 0 ? (parts.end?.quiet ? '' : ' ') : ' and ', slot]),
+    ...(parts.end?.quiet ? [parts.end] : []),
+    parts.kind.text === 'hold' && parts.values.length === 0 ? ' for ' : ' in ',
+    parts.time,
+    ...(parts.vapour ? [`, ${parts.vapourName} `, parts.vapour] : []),
+  ],
+  noTime: 'no time said',
+  /** Names of the fields of a step, read aloud. */
+  stepField: (
+    what:
+      'kind' | 'end' | 'T' | 'p' | 'vapourFraction' | 'solidFraction' | 'heat' | 'time' | 'vapour',
+    tag: string,
+  ): string =>
+    `${
+      {
+        kind: 'kind of step',
+        end: 'end of step',
+        T: 'temperature',
+        p: 'pressure',
+        vapourFraction: 'share of vapour',
+        solidFraction: 'share of solid',
+        heat: 'heat',
+        time: 'time or rate',
+        vapour: 'what becomes of the vapour',
+      }[what]
+    } of ${tag}`,
+  /** The vapour of a substance, in running text. */
+  vapourName: (substance: string): string => (substance === 'water' ? 'steam' : 'vapour'),
+  vapourWays: { stays: 'stays', leaves: 'leaves' },
+  encounterAt: (what: string, at: string): string => `${what} at ${at}`,
+  stateNote: (what: string, at: string): string => `${what}, ${at}`,
+  onLine: (id: string): string =>
+    id.startsWith('melting') ? 'melting' : id.startsWith('sublimation') ? 'subliming' : 'boiling',
+  vapourShare: (text: string): string => `${text} vapour`,
+  massLeft: (text: string): string => `${text} left`,
+
+  /** A state as a sentence with figures in it. */
+  stateSentence: (slots: readonly Slot[]): Sentence =>
+    slots.some(({ field }) => field === 'vapourFraction')
+      ? ['On the boiling line at ', slots[0]!, ', ', slots[1]!, ' vapour']
+      : ['At ', slots[0]!, ' and ', slots[1]!],
 
   quantity: quantityNames,
   reading: readingSentence,

@@ -11,6 +11,8 @@ export interface Slot {
   readonly quantity?: Quantity;
   /** a choice is made among words, */
   readonly choices?: readonly { readonly value: string; readonly label: string }[];
+  /** a choice that only shows a caret, where what is chosen is plain from the figures beside it, */
+  readonly quiet?: boolean;
   /** anything else is plain text; `hint` stands where it is empty. */
   readonly hint?: string;
 }

@@ -45,7 +45,7 @@ export function cautions(states: readonly Judged[]): readonly Caution[] {
     const [name] = number(met[0]!);
     found.push({
       code,
-      at: met.map((j) => j.id),
+      at: [...new Set(met.map((j) => j.id))],
       numbers: { [name]: worst === 'high' ? Math.max(...values) : Math.min(...values) },
     });
   }

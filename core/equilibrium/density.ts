@@ -1,7 +1,7 @@
 import { NotConverged } from '../errors.ts';
 import { auxiliary } from '../models/auxiliary.ts';
 import type { Medium } from './medium.ts';
-import { saturationAt } from './saturation.ts';
+import { criticalCap, saturationAt } from './saturation.ts';
 
 /**
  * Density (kg/m³) of the fluid at T (K) and p (Pa) on the branch asked for: `liquid` is the branch
@@ -29,16 +29,19 @@ export function densityAt(
   let rho = start ?? NaN;
   if (T < critical.T) {
     const near = T > 0.95 * critical.T;
+    // So close below the critical temperature the loop of the isotherm is lost in rounding, and the
+    // root for a pressure next to the critical one may lie on either side of the critical density.
+    const slack = T > critical.T - criticalCap ? 0.1 : 1e-9;
     if (branch === 'liquid') {
       low = near
         ? saturationAt(m, T).rhoL
         : auxiliary(substance.saturation.liquidDensity, T) * 0.98;
       // At the very line rounding may ask for a hair less than the saturated density.
-      low *= 1 - 1e-9;
+      low *= 1 - slack;
       if (!(rho > low)) rho = low * 1.03;
     } else {
       high = near
-        ? saturationAt(m, T).rhoV * (1 + 1e-9)
+        ? saturationAt(m, T).rhoV * (1 + slack)
         : Math.min(auxiliary(substance.saturation.vapourDensity, T) * 1.1, critical.rho);
       if (!(rho > 0 && rho < high)) rho = Math.min(p / RT, 0.98 * high);
     }
@@ -47,9 +50,10 @@ export function densityAt(
     if (p > critical.p && rho > critical.rho) rho = critical.rho * 1.5;
   }
   let last = Infinity;
+  let error = Infinity;
   for (let i = 0; i < 200; i++) {
     fluid.residual(T, rho);
-    const error = rho * RT * (1 + fluid.aRd) - p;
+    error = rho * RT * (1 + fluid.aRd) - p;
     const slope = RT * (1 + 2 * fluid.aRd + fluid.aRdd);
     if (error === 0) return rho;
     if (error < 0) low = Math.max(low, rho);
@@ -69,5 +73,7 @@ export function densityAt(
     else if (rho - next > 4 * most) next = rho - 4 * most;
     rho = next;
   }
+  // Next to the critical point the slope drowns in rounding: a bracket closed on p is the answer.
+  if (Math.abs(error) <= 1e-12 * p + 1e-14 * rho * RT) return rho;
   throw new NotConverged(`density of the ${branch}`, { T, p });
 }

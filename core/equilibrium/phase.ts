@@ -4,7 +4,12 @@ import { auxiliary } from '../models/auxiliary.ts';
 import { densityAt } from './density.ts';
 import type { Medium } from './medium.ts';
 import { saturationAt } from './saturation.ts';
-import { meltingPointAtPressure, meltingPressureRange, seam, sublimationPoint } from './solidLines.ts';
+import {
+  meltingPointAtPressure,
+  meltingPressureRange,
+  seam,
+  sublimationPoint,
+} from './solidLines.ts';
 
 export type PhaseName = 'solid' | 'liquid' | 'vapour' | 'supercritical';
 
@@ -24,11 +29,24 @@ export const onBoundary = 1e-9;
 
 /** The line along which the substance melts at pressure p, or null where none is published. */
 export function meltingLineAt(m: Medium, p: number): MeltingLine | null {
-  for (const line of m.substance.melting) {
+  const { melting } = m.substance;
+  const covers = (slack: number) => (line: MeltingLine) => {
     const [low, high] = meltingPressureRange(m, line);
-    if (p >= low * (1 - seam) && p <= high * (1 + seam)) return line;
-  }
-  return null;
+    return p >= low * (1 - slack) && p <= high * (1 + slack);
+  };
+  // Only a pressure that no line has, in the gap at a seam, goes to a neighbour.
+  return melting.find(covers(0)) ?? melting.find(covers(seam)) ?? null;
+}
+
+/**
+ * Below this temperature the substance may be solid at a pressure that no melting line reaches: a
+ * melting curve rises more steeply than p ∝ T, which bounds it beyond its last published point.
+ */
+function maybeSolidBelow(m: Medium, p: number): number {
+  return m.substance.melting.reduce((T, line) => {
+    const [, high] = meltingPressureRange(m, line);
+    return Math.max(T, p > high ? line.range.Tmax * (p / high) : T);
+  }, m.triple.T);
 }
 
 /** The sublimation line that covers temperature T, or null. */
@@ -48,6 +66,22 @@ export function fluidName(m: Medium, T: number, p: number): 'liquid' | 'vapour' 
 }
 
 const close = (a: number, b: number): boolean => Math.abs(a - b) < onBoundary * Math.abs(b);
+
+/** Whether (T, p) is within 1e-9, in p or in T, of a line of which only p over T is solved. */
+function onLine(
+  T: number,
+  p: number,
+  atT: number,
+  Tmax: number,
+  line: (T: number) => number,
+): boolean {
+  if (close(p, atT)) return true;
+  // Far from the line the two solutions below cannot enclose p.
+  if (Math.abs(p / atT - 1) > 1e-6) return false;
+  const colder = line(T * (1 - onBoundary));
+  const warmer = line(Math.min(Tmax, T * (1 + onBoundary)));
+  return p > colder && p < warmer;
+}
 
 /**
  * The stable phase of the substance at T (K) and p (Pa), with its density.
@@ -73,7 +107,8 @@ export function stablePhase(m: Medium, T: number, p: number): PhaseState {
       const line = sublimationLineAt(m, T);
       if (!line) throw new Unknown('the phase', 'no sublimation line is published here');
       const at = sublimationPoint(m, line, T);
-      if (close(p, at.p)) throw new Undetermined(line.id, T, p, 'solid fraction');
+      if (onLine(T, p, at.p, line.range.Tmax, (t) => sublimationPoint(m, line, t).p))
+        throw new Undetermined(line.id, T, p, 'solid fraction');
       if (p > at.p)
         return { phase: 'solid', solid: line.solid, T, p, rho: solidDensity(m, line.solid, T, p) };
       return { phase: 'vapour', solid: null, T, p, rho: densityAt(m, T, p, 'vapour') };
@@ -97,14 +132,17 @@ export function stablePhase(m: Medium, T: number, p: number): PhaseState {
             rho: solidDensity(m, line.solid, T, p),
           };
       }
-    } else if (T < triple.T) {
+    } else if (T < maybeSolidBelow(m, p)) {
       throw new Unknown('the phase', 'no melting line is published here');
     }
   }
   const phase = fluidName(m, T, p);
   if (T < critical.T && T >= triple.T && p < critical.p) {
     const guess = auxiliary(substance.saturation.pressure, T);
-    if (Math.abs(p / guess - 1) < 0.2 && close(p, saturationAt(m, T).p))
+    if (
+      Math.abs(p / guess - 1) < 0.2 &&
+      onLine(T, p, saturationAt(m, T).p, critical.T, (t) => saturationAt(m, t).p)
+    )
       throw new Undetermined('saturation', T, p, 'vapour fraction');
   }
   const branch = phase === 'vapour' ? 'vapour' : 'liquid';

@@ -11,7 +11,7 @@ export interface Saturation {
   readonly rhoV: number;
 }
 
-/** Closer to the critical temperature than this, the critical point answers. */
+/** Closer to the critical temperature (K) than this, both densities are the critical one. */
 export const criticalCap = 1e-4;
 
 /**
@@ -30,7 +30,8 @@ const triple = (m: Medium): number => m.substance.triplePoints[0].T;
  * The pressure is taken from the vapour side, where no digits cancel.
  * Domain: from 15 % below the triple temperature (supercooled liquid, a guide for solvers only) to
  * the critical temperature; elsewhere throws OutOfRange. Within 1e-4 K of the critical temperature
- * the critical point is returned.
+ * both densities are the critical one and the pressure is interpolated, so that it never passes
+ * what the liquid's or the vapour's own isotherm reaches.
  * Source of the method: R. Akasaka, J. Therm. Sci. Technol. 3, 442 (2008).
  */
 export function saturationAt(m: Medium, T: number, start?: Saturation): Saturation {
@@ -44,8 +45,12 @@ export function saturationAt(m: Medium, T: number, start?: Saturation): Saturati
       m.substance.fluid.validity.source,
       'K',
     );
-  if (critical.T - T < criticalCap)
-    return { T, p: critical.p, rhoL: critical.rho, rhoV: critical.rho };
+  const capT = critical.T - criticalCap;
+  if (T > capT) {
+    const share = (critical.T - T) / (critical.T - capT);
+    const p = critical.p - share * (critical.p - saturationAt(m, capT).p);
+    return { T, p, rhoL: critical.rho, rhoV: critical.rho };
+  }
 
   const rhor = fluid.rhor;
   const dc = critical.rho / rhor;
@@ -74,6 +79,8 @@ export function saturationAt(m: Medium, T: number, start?: Saturation): Saturati
     if (!Number.isFinite(dl) || !Number.isFinite(dv)) break;
     let size = Math.max(Math.abs(dl) / l, Math.abs(dv) / v);
     if (size < tolerance || (size < 1e-7 && size >= last)) {
+      // A bad start can lead to a second pair of equal p and g, on branches that are unstable.
+      if (!(a > 0 && b > 0)) break;
       v += dv;
       l += dl;
       const solved = settle(m, T, l, v);
@@ -104,8 +111,13 @@ function settle(m: Medium, T: number, l: number, v: number): Saturation | null {
   return solved;
 }
 
-/** Pressure at which the two branches have one Gibbs energy, searched between the spinodals. */
-function saturationByBracket(m: Medium, T: number): Saturation {
+/**
+ * Saturation at T (K) without a start: the pressure at which the two branches have one Gibbs energy,
+ * searched between the spinodals. Slow; the way out of `saturationAt` where Newton fails.
+ *
+ * Domain: as `saturationAt`, up to 0.01 K below the critical temperature.
+ */
+export function saturationByBracket(m: Medium, T: number): Saturation {
   const { fluid, critical } = m;
   const RT = fluid.R * T;
   const slope = (rho: number): number => {

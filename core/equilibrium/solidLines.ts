@@ -60,15 +60,19 @@ export function meltingPoint(
   const { Tmin, Tmax } = line.range;
   if (!(T >= Tmin && T <= Tmax))
     throw new OutOfRange('T', T, { min: Tmin, max: Tmax }, line.equation.source, 'K');
-  const guess = start?.p ?? meltingPressure(line.equation, T);
   if (line.route !== 'equilibrium') {
     const p = meltingPressure(line.equation, T);
     return { T, p, rho: liquidDensity(m, T, p, start?.rho ?? undefined) };
   }
   if (Math.abs(T - m.triple.T) < 1e-9) return { T, p: m.triple.p, rho: m.triple.rhoL };
   const solid = m.solids.get(line.solid!)!.model;
-  let p = guess;
-  let rho = start?.rho ?? undefined;
+  let p = meltingPressure(line.equation, T);
+  let rho: number | undefined;
+  // The published curve lies parallel to the solved one: a neighbour gives the distance.
+  if (start && Math.abs(start.T - T) < 0.01 * T) {
+    p += start.p - meltingPressure(line.equation, start.T);
+    rho = start.rho ?? undefined;
+  }
   let last = Infinity;
   for (let i = 0; i < 50; i++) {
     rho = densityAt(m, T, Math.max(p, 1), 'liquid', rho);
@@ -124,8 +128,10 @@ export function meltingPointAtPressure(
   // The range ends where the published curve does; the solved line may pass it by a hair.
   const low = Tmin - 0.05;
   const high = Tmax + 0.05;
-  let T = start?.T ?? startTemperature(line, p);
-  let rho = start?.rho ?? undefined;
+  // From a far neighbour Newton may ask for a liquid where there is none.
+  const near = start && Math.abs(start.p - p) < 0.1 * p ? start : undefined;
+  let T = near?.T ?? startTemperature(line, p);
+  let rho = near?.rho ?? undefined;
   let last = Infinity;
   for (let i = 0; i < 50; i++) {
     rho = densityAt(m, T, p, 'liquid', rho);

@@ -73,6 +73,33 @@ export function saturatedState(
   return { T: s.T, p: s.p, parts, freedom: 0 };
 }
 
+/**
+ * The state of two phases in equilibrium with a share by mass of the second, 0 to 1, ends included,
+ * or the range in which it lies. Elsewhere throws OutOfRange.
+ */
+export function mixedState(
+  m: Medium,
+  [first, second]: readonly [PhaseState, PhaseState],
+  share: number | readonly [number, number],
+): State {
+  const { T, p } = first;
+  if (typeof share !== 'number') {
+    const [low, high] = share;
+    return {
+      T,
+      p,
+      parts: [part(m, first, [1 - high, 1 - low]), part(m, second, [low, high])],
+      freedom: 1,
+    };
+  }
+  if (!(share >= 0 && share <= 1))
+    throw new OutOfRange('fraction', share, { min: 0, max: 1 }, 'definition', '1');
+  const parts: Part[] = [];
+  if (share < 1) parts.push(part(m, first, 1 - share));
+  if (share > 0) parts.push(part(m, second, share));
+  return { T, p, parts, freedom: 0 };
+}
+
 /** Both sides of the saturation line as phases. */
 export function saturatedPhases(s: {
   readonly T: number;

@@ -8,7 +8,7 @@ import {
 } from '../equilibrium/solidLines.ts';
 import type { Medium } from '../equilibrium/medium.ts';
 import { solidDensity, type PhaseState } from '../equilibrium/phase.ts';
-import { criticalCap, saturationAt, saturationAtPressure } from '../equilibrium/saturation.ts';
+import { saturationAt, saturationAtPressure } from '../equilibrium/saturation.ts';
 import { saturatedPhases } from '../equilibrium/state.ts';
 import type { MeltingLine, SublimationLine } from '../substances/substance.ts';
 
@@ -91,12 +91,7 @@ function saturationCurve(m: Medium): BoundaryCurve {
     p: [triple.p, critical.p],
     falling: false,
     along: 'T',
-    atTemperature: (T, near) =>
-      point(
-        critical.T - T < criticalCap
-          ? { T, p: critical.p, rhoL: critical.rho, rhoV: critical.rho }
-          : saturationAt(m, T, start(near, T)),
-      ),
+    atTemperature: (T, near) => point(saturationAt(m, T, start(near, T))),
     atPressure: (p, near) =>
       point(
         saturationAtPressure(

@@ -31,10 +31,16 @@ export type NoMargin =
  * The four margins of (T, p) in K and Pa: the first boundary warmer, colder, at higher and at lower
  * pressure, each named or absent with its reason.
  *
- * A point on a boundary has that boundary at distance 0 on neither side; the next one counts.
+ * A point on a boundary has that boundary at distance 0 on neither side; the next one counts. A state
+ * known to lie on the boundary `on` says so, since rounding might put it beside.
  */
-export function margins(m: Medium, T: number, p: number): readonly Margin[] {
-  const curves = boundaryCurves(m);
+export function margins(
+  m: Medium,
+  T: number,
+  p: number,
+  on: string | null = null,
+): readonly Margin[] {
+  const curves = boundaryCurves(m).filter(({ id }) => id !== on);
   const across = curves
     .filter((c) => p >= c.p[0] && p <= c.p[1])
     .map((c) => ({ c, T: c.atPressure(p).T, p }));

@@ -28,7 +28,7 @@ const transforms = {
 /** A scale of the kind over a range; throws RangeError where the range cannot be drawn. */
 export function scale(kind: Scale['kind'], range: readonly [number, number]): Scale {
   const [low, high] = range;
-  if (!(high > low) || (kind !== 'linear' && !(low > 0)) || !Number.isFinite(high))
+  if (!(high > low) || (kind !== 'linear' && !(low > 0)) || !Number.isFinite(high - low))
     throw new RangeError(`a ${kind} scale cannot run from ${low} to ${high}`);
   const { to, from } = transforms[kind];
   const a = to(low);

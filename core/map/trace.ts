@@ -48,8 +48,9 @@ const deviation = (m: Place, a: Place, b: Place): number => {
  * Follows a boundary inside the plane's frame.
  *
  * Method: the frame's own crossings are solved; between them segments are halved, in the axis along
- * which the curve is single-valued, until the midpoint lies within 4 × 0.8 × `tolerance` of its
- * chord; the midpoint then becomes a vertex too, which leaves a quarter of that deviation.
+ * which the curve is single-valued, until the midpoint lies within 4 × 0.4 × `tolerance` of its
+ * chord; the midpoint then becomes a vertex too, which leaves a quarter of that deviation. The
+ * factor leaves room for segments about an inflection, whose midpoints lie near their chords.
  * Returns null where the curve does not enter the frame.
  */
 export function trace(
@@ -78,7 +79,7 @@ export function trace(
     const s = 0.5 * (sa + sb);
     const middle = at(s, points[points.length - 1]!);
     const d = deviation(plane.project(middle)!, plane.project(a)!, plane.project(b)!);
-    if (depth > 2 && (d <= 3.2 * tolerance || depth > 18)) {
+    if (depth > 2 && (d <= 1.6 * tolerance || depth > 18)) {
       points.push(middle, b);
       return;
     }

@@ -37,12 +37,14 @@ const finite = (x: number): number | null => (Number.isFinite(x) && x > 0 ? x : 
 /**
  * Properties of the fluid at the last evaluated (T, ρ), as a fresh record.
  *
- * Source: relations as in IAPWS R6-95(2018), table 3. cp is null where ∂p/∂ρ is not positive (at
- * the critical point it is infinite); the speed of sound likewise.
+ * Source: relations as in IAPWS R6-95(2018), table 3. Where ∂p/∂ρ vanishes to rounding, at the
+ * critical point, cp and cv are infinite and the speed of sound is zero: null.
  */
 export function fluidProperties(f: Helmholtz): Properties {
   const { R, T } = f;
   const slope = 1 + 2 * f.aRd + f.aRdd;
+  // Rounding leaves about 1e-14 of the terms that cancel at the critical point.
+  const critical = slope < 1e-11;
   const cross = 1 + f.aRd - f.aRdt;
   const cv = -R * (f.a0tt + f.aRtt);
   const cp = cv + (R * cross * cross) / slope;
@@ -52,8 +54,8 @@ export function fluidProperties(f: Helmholtz): Properties {
     h: enthalpy(f),
     s: entropy(f),
     u: R * T * (f.a0t + f.aRt),
-    cp: slope > 0 ? finite(cp) : null,
-    cv: finite(cv),
-    w: w2 > 0 && slope > 0 ? Math.sqrt(w2) : null,
+    cp: critical ? null : finite(cp),
+    cv: critical ? null : finite(cv),
+    w: critical || !(w2 > 0) ? null : Math.sqrt(w2),
   };
 }

@@ -325,7 +325,7 @@ export class Helmholtz {
       const c = Math.cbrt(x2);
       root = c * c;
     } else root = x2 === 0 ? 0 : Math.exp((m - 1) * Math.log(x2));
-    let xa = x2;
+    let xa;
     if (a === 3.5) xa = x2 * x2 * Math.abs(x);
     else if (a === 3) xa = x2 * x2;
     else xa = x2 === 0 ? 0 : Math.exp((a - 1) * Math.log(x2));

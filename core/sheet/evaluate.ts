@@ -2,25 +2,30 @@ import { cautions } from '../cautions/rules.ts';
 import type { Judged } from '../cautions/caution.ts';
 import { medium, type Medium } from '../equilibrium/medium.ts';
 import { saturatedState, stateAt, type State } from '../equilibrium/state.ts';
-import { OutOfRange, Undetermined, Unknown } from '../errors.ts';
-import { boundaryCurves } from '../map/boundary.ts';
+import { boundaryCurves, type Boundary } from '../map/boundary.ts';
 import { margins, type Margin } from '../map/margins.ts';
-import { scale, temperaturePressurePlane } from '../map/plane.ts';
-import { regions } from '../map/regions.ts';
+import { scale, temperaturePressurePlane, type Plane } from '../map/plane.ts';
+import { regions, type Region } from '../map/regions.ts';
 import { trace } from '../map/trace.ts';
+import { problemOf, type StateProblem } from '../process/problem.ts';
 import type { Substance } from '../substances/substance.ts';
 import { absolutePressure, parseReading, temperature, type UnitId } from '../units/index.ts';
+import { kept } from './kept.ts';
+import { evaluatePath, tracksOf } from './paths.ts';
 import { pressureRange, temperatureRange } from './range.ts';
 import type {
   MapPoint,
   MapResult,
+  PathResult,
   Results,
   SiteResult,
-  StateProblem,
   StateResult,
 } from './results.ts';
 import type { Sheet, Site, StateItem, View } from './schema.ts';
 import { localPressure, siteErrors } from './site.ts';
+import { touched } from './touched.ts';
+
+export { problemOf };
 
 /** Size in mm of a view's frame on its page, which the caption's length may change. */
 export type FrameOf = (
@@ -31,26 +36,17 @@ export type FrameOf = (
 const siteOf = (sheet: Sheet, id: string | undefined): Site | undefined =>
   id === undefined ? sheet.sites[0] : sheet.sites.find((site) => site.id === id);
 
-/** The problem behind an error that a user's givens can cause; others are ours and pass through. */
-export function problemOf(error: unknown): StateProblem {
-  if (error instanceof OutOfRange) {
-    const { quantity, value, range, source, unit } = error;
-    return { code: 'outOfRange', quantity, value, min: range.min, max: range.max, source, unit };
-  }
-  if (error instanceof Undetermined)
-    return { code: 'onBoundary', boundary: error.boundary, needs: error.needs };
-  if (error instanceof Unknown) return { code: 'unknown', reason: error.reason };
-  throw error;
-}
-
-function evaluateState(sheet: Sheet, item: StateItem, m: Medium): StateResult | null {
-  const site = siteOf(sheet, item.site);
+/** A state item evaluated; the same objects give the same result, not made again. */
+const evaluateState = kept(function evaluateState(
+  item: StateItem,
+  m: Medium,
+  site: Site | undefined,
+  pressureKind: Sheet['pressureKind'],
+): StateResult | null {
   const local = localPressure(site);
   const reading =
-    item.p === undefined
-      ? null
-      : parseReading(item.p, 'pressure', { defaultKind: sheet.pressureKind });
-  const kind = reading?.kind === 'unstated' || !reading ? sheet.pressureKind : reading.kind!;
+    item.p === undefined ? null : parseReading(item.p, 'pressure', { defaultKind: pressureKind });
+  const kind = reading?.kind === 'unstated' || !reading ? pressureKind : reading.kind!;
   const given = {
     T: item.T === undefined ? null : temperature(parseReading(item.T, 'temperature')),
     p: reading ? absolutePressure(reading, local) : null,
@@ -90,20 +86,7 @@ function evaluateState(sheet: Sheet, item: StateItem, m: Medium): StateResult | 
     error,
     touches: touched(met, error),
   };
-}
-
-/** The boundary inside the limits of error, if any. */
-function touched(
-  met: readonly Margin[],
-  error: { readonly T: number; readonly p: number },
-): string | null {
-  for (const margin of met) {
-    if (margin.boundary === null) continue;
-    const thermal = margin.direction === 'warmer' || margin.direction === 'colder';
-    if (margin.distance <= (thermal ? error.T : error.p)) return margin.boundary;
-  }
-  return null;
-}
+});
 
 /** Every formulation that a substance's lines rest on, the fluid's first. */
 function formulations({ fluid, solids, melting, sublimation }: Substance): readonly string[] {
@@ -136,14 +119,44 @@ function mapPoints(m: Medium): readonly MapPoint[] {
   ];
 }
 
+interface Lines {
+  readonly boundaries: readonly Boundary[];
+  readonly regions: readonly Region[];
+}
+const traced = new WeakMap<Medium, Map<string, Lines>>();
+/** Planes whose lines are kept for each substance. */
+const mostPlanes = 8;
+
+/** Boundaries and fields of a plane; kept, since most changes of a sheet leave its axes alone. */
+function linesOf(m: Medium, plane: Plane): Lines {
+  const { T, p, width, height } = plane;
+  const key = [T.kind, ...T.range, p.kind, ...p.range, width, height].join(' ');
+  let planes = traced.get(m);
+  if (!planes) traced.set(m, (planes = new Map<string, Lines>()));
+  const ready = planes.get(key);
+  if (ready) return ready;
+  const boundaries = boundaryCurves(m)
+    .map((curve) => trace(curve, plane))
+    .filter((b) => b !== null);
+  const lines = { boundaries, regions: regions(m, plane, boundaries) };
+  if (planes.size >= mostPlanes) planes.delete(planes.keys().next().value!);
+  planes.set(key, lines);
+  return lines;
+}
+
 function evaluateMap(
   sheet: Sheet,
   view: View,
   m: Medium,
   states: readonly StateResult[],
+  paths: readonly PathResult[],
   size: { readonly width: number; readonly height: number },
 ): MapResult {
-  const run = states.filter((s) => s.substance === m.substance.id);
+  const own = paths.filter((path) => path.substance === m.substance.id);
+  const run = [
+    ...states.filter((s) => s.substance === m.substance.id),
+    ...own.flatMap((path) => path.states),
+  ];
   const local = localPressure(siteOf(sheet, view.pressure.site));
   const unit = view.pressure.unit as UnitId;
   const T = view.temperature.range
@@ -172,9 +185,7 @@ function evaluateMap(
     p: scale(view.pressure.scale, p),
     ...size,
   });
-  const boundaries = boundaryCurves(m)
-    .map((curve) => trace(curve, plane))
-    .filter((b) => b !== null);
+  const { boundaries, regions: fields } = linesOf(m, plane);
   const inside = (t: number, q: number) => t >= T[0] && t <= T[1] && q >= p[0] && q <= p[1];
   const { validity } = m.substance.fluid;
   return {
@@ -184,7 +195,8 @@ function evaluateMap(
     p: { kind: view.pressure.scale, range: p },
     ...size,
     boundaries,
-    regions: regions(m, plane, boundaries),
+    regions: fields,
+    tracks: tracksOf(own, plane, boundaries),
     points: mapPoints(m).filter((point) => inside(point.T, point.p)),
     validity: { T: [validity.vapourTmin, validity.Tmax], pmax: validity.pmax },
     outside: run.filter((s) => !inside(s.T, s.p)).map((s) => s.id),
@@ -220,9 +232,26 @@ export function evaluate(
           : 'standard',
   }));
   const states = sheet.items
-    .map((item) => evaluateState(sheet, item, mediumOf(item.substance)))
+    .map((item) =>
+      item.kind === 'state'
+        ? evaluateState(
+            item,
+            mediumOf(item.substance),
+            siteOf(sheet, item.site),
+            sheet.pressureKind,
+          )
+        : null,
+    )
     .filter((state) => state !== null);
-  const judged: Judged[] = states.map((s) => {
+  const paths = sheet.items
+    .filter((item) => item.kind === 'path')
+    .map((item) =>
+      evaluatePath(item, mediumOf(item.substance), siteOf(sheet, item.site), sheet.pressureKind),
+    );
+  const judge = (
+    s: Pick<StateResult, 'id' | 'substance' | 'site' | 'T' | 'p'>,
+    solid: boolean,
+  ): Judged => {
     const m = mediumOf(s.substance);
     return {
       id: s.id,
@@ -231,10 +260,19 @@ export function evaluate(
       T: s.T,
       p: s.p,
       local: localPressure(siteOf(sheet, s.site ?? undefined)),
-      solid: s.state?.parts.some((part) => part.phase === 'solid') ?? false,
+      solid,
       triplePressure: m.triple.p,
     };
-  });
+  };
+  const judged: Judged[] = [...states, ...paths.flatMap((path) => path.states)].map((s) =>
+    judge(s, s.state?.parts.some((part) => part.phase === 'solid') ?? false),
+  );
+  // A solid that a step only passes through stands at the step's end.
+  for (const { steps, substance, site } of paths)
+    for (const { id, encounters, problem } of steps)
+      for (const { from, to, T, p } of problem ? [] : encounters)
+        if (from.phase === 'solid' || to.phase === 'solid')
+          judged.push(judge({ id, substance, site, T, p }, true));
   const about = {
     sites,
     cautions: cautions(judged),
@@ -245,8 +283,9 @@ export function evaluate(
   return {
     ...about,
     states,
+    paths,
     maps: sheet.views.map((view) =>
-      evaluateMap(sheet, view, mediumOf(view.substance), states, frameOf(view, about)),
+      evaluateMap(sheet, view, mediumOf(view.substance), states, paths, frameOf(view, about)),
     ),
   };
 }

@@ -2,7 +2,17 @@ import * as v from 'valibot';
 import { absolutePressure, parseReading, ReadingError, type ReadingIssue } from '../units/index.ts';
 import type { Quantity, Reading } from '../units/index.ts';
 import { unitTable } from '../units/index.ts';
-import { sheetSchema, type Sheet, type Site, type StateItem, type View } from './schema.ts';
+import { rateOf, startGivens } from '../process/path.ts';
+import { quantityOfEnd } from '../process/step.ts';
+import { kindOf, type Step } from '../process/steps/index.ts';
+import {
+  sheetSchema,
+  type PathItem,
+  type Sheet,
+  type Site,
+  type StateItem,
+  type View,
+} from './schema.ts';
 import { localPressure } from './site.ts';
 
 /** What is wrong at one place of a sheet; the place reads like `items[3].p`. */
@@ -161,6 +171,67 @@ function check(sheet: Sheet): readonly SheetIssue[] {
         received: item.vapourFraction!,
       });
   };
+  const pathPlaces = (
+    place: string,
+    given: Readonly<Record<string, string | undefined>>,
+    site: Site | undefined,
+  ): void => {
+    for (const [key, quantity] of Object.entries(quantityOfEnd)) {
+      if (quantity === 'pressure') absolute(`${place}.${key}`, given[key], site);
+      else {
+        const reading = read(`${place}.${key}`, given[key], quantity);
+        if (quantity === 'fraction' && reading && !(reading.value >= 0 && reading.value <= 1))
+          issues.push({
+            place: `${place}.${key}`,
+            code: 'shape',
+            expected: '0 to 1',
+            received: given[key]!,
+          });
+      }
+    }
+  };
+  const oneOf = (
+    place: string,
+    given: Readonly<Record<string, string | undefined>>,
+    allowed: readonly (readonly string[])[],
+  ): void => {
+    const keys = Object.keys(given).filter((key) => given[key] !== undefined);
+    if (!allowed.some((a) => a.length === keys.length && a.every((key) => keys.includes(key))))
+      issues.push({ place, code: 'givens', given: keys });
+  };
+  const checkStep = (step: Step, place: string, site: Site | undefined): void => {
+    const { ends, rates } = kindOf(step);
+    oneOf(`${place}.end`, step.end, ends);
+    pathPlaces(`${place}.end`, step.end, site);
+    const time = read(`${place}.time`, step.time, 'time');
+    if (time && !(time.value >= 0))
+      issues.push({
+        place: `${place}.time`,
+        code: 'shape',
+        expected: '0 s or more',
+        received: step.time!,
+      });
+    if (step.rate === undefined) return;
+    if (step.time !== undefined) issues.push({ place, code: 'givens', given: ['time', 'rate'] });
+    // Read as the first quantity that the kind takes, so that an issue is told in its terms.
+    let of: Quantity = rates[0] ?? 'temperatureRate';
+    try {
+      of = rateOf(step.rate).of;
+    } catch (error) {
+      if (!(error instanceof ReadingError)) throw error;
+    }
+    read(`${place}.rate`, step.rate, of);
+    if (!rates.some((rate) => rate === of))
+      issues.push({ place: `${place}.rate`, code: 'givens', given: [of] });
+  };
+  const checkPath = (item: PathItem, place: string): void => {
+    const site = siteOf(`${place}.site`, item.site);
+    substanceOf(`${place}.substance`, item.substance);
+    oneOf(`${place}.start`, item.start, startGivens);
+    pathPlaces(`${place}.start`, item.start, site);
+    unique(item.steps, `${place}.steps`);
+    item.steps.forEach((step, i) => checkStep(step, `${place}.steps[${i}]`, site));
+  };
   const checkView = (view: View, place: string): void => {
     substanceOf(`${place}.substance`, view.substance);
     const site = siteOf(`${place}.pressure.site`, view.pressure.site);
@@ -203,7 +274,9 @@ function check(sheet: Sheet): readonly SheetIssue[] {
     if (view.pressure.scale === 'logarithmic' && p?.[0] === 0)
       issues.push({ place: `${place}.pressure.range[0]`, code: 'emptyRange' });
   };
-  sheet.items.forEach((item, i) => checkState(item, `items[${i}]`));
+  sheet.items.forEach((item, i) =>
+    item.kind === 'path' ? checkPath(item, `items[${i}]`) : checkState(item, `items[${i}]`),
+  );
   sheet.views.forEach((view, i) => checkView(view, `views[${i}]`));
   return issues;
 }

@@ -3,24 +3,11 @@ import type { State } from '../equilibrium/state.ts';
 import type { Boundary } from '../map/boundary.ts';
 import type { Margin } from '../map/margins.ts';
 import type { Region } from '../map/regions.ts';
+import type { Encounter, NamedPhase } from '../process/encounter.ts';
+import type { HeatAbsent } from '../process/outcome.ts';
+import type { Leg, StateProblem, StepProblem } from '../process/problem.ts';
 
-/** Why a state has no result; carries what the sentence needs. */
-export type StateProblem =
-  | {
-      readonly code: 'outOfRange';
-      readonly quantity: string;
-      readonly value: number;
-      readonly min: number;
-      readonly max: number;
-      readonly source: string;
-      readonly unit: string;
-    }
-  | {
-      readonly code: 'onBoundary';
-      readonly boundary: string;
-      readonly needs: 'vapour fraction' | 'solid fraction';
-    }
-  | { readonly code: 'unknown'; readonly reason: string };
+export type { StateProblem, StepProblem } from '../process/problem.ts';
 
 export interface SiteResult {
   readonly id: string;
@@ -50,6 +37,81 @@ export interface StateResult {
   readonly touches: string | null;
 }
 
+/** A state of a path: its start, or the end of a step. */
+export interface PathState extends StateResult {
+  readonly path: string;
+  /** Id of the step that ends here within its path; null at the start. */
+  readonly step: string | null;
+  readonly state: State;
+  /** Id of the boundary it lies on. */
+  readonly on: string | null;
+  /** kg left per kg at the path's start; null where it is open. */
+  readonly mass: number | null;
+}
+
+/** A step of a path; energies in J and masses in kg, per kg at the path's start. */
+export interface StepResult {
+  /** Also the id of the state at its end. */
+  readonly id: string;
+  /** Id of the step within its path. */
+  readonly step: string;
+  readonly kind: string;
+  /** Its way on the map; each map holds the vertices. Empty where it stays in one place. */
+  readonly legs: readonly Leg[];
+  /** The phases gone through off the boundaries, in order. */
+  readonly phases: readonly NamedPhase[];
+  readonly encounters: readonly Encounter[];
+  /** Heat taken in; null where `heatAbsent` says why. */
+  readonly heat: number | null;
+  readonly heatAbsent: HeatAbsent | null;
+  /** Work done on the substance. */
+  readonly work: number | null;
+  /** What left as vapour; null where none may leave. */
+  readonly lost: {
+    readonly mass: number | null;
+    /** Enthalpy it took along, and its heat of vaporisation. */
+    readonly enthalpy: number | null;
+    readonly latent: number | null;
+  } | null;
+  /** Mass left at the end. */
+  readonly mass: number | null;
+  /** Duration, and time since the path's start at its end, s; null where no time or rate tells it. */
+  readonly time: number | null;
+  readonly clock: number | null;
+  /** Why it does not reach its end; the path stops there. */
+  readonly problem: StepProblem | null;
+}
+
+/** A planned run evaluated. */
+export interface PathResult {
+  readonly id: string;
+  readonly tag: string;
+  readonly name: string | null;
+  readonly substance: string;
+  readonly site: string | null;
+  /** Start and step ends as far as the path goes: A1, A2, … */
+  readonly states: readonly PathState[];
+  readonly steps: readonly StepResult[];
+  /** The first problem, at a step or (null) at the start. */
+  readonly problem: { readonly step: string | null; readonly problem: StepProblem } | null;
+  /** Sums over all steps, null where one of them is not known. */
+  readonly total: {
+    readonly heat: number | null;
+    readonly work: number | null;
+    readonly time: number | null;
+  };
+}
+
+/** A leg of a path as vertices on one map. */
+export interface Track {
+  readonly path: string;
+  /** Id of the step's result. */
+  readonly step: string;
+  /** Id of the boundary it lies on; null where it is straight in T and p. */
+  readonly along: string | null;
+  readonly points: readonly { readonly T: number; readonly p: number }[];
+}
+
 export interface MapPoint {
   readonly id: string;
   readonly kind: 'triple' | 'critical';
@@ -74,15 +136,17 @@ export interface MapResult {
   readonly boundaries: readonly Boundary[];
   readonly regions: readonly Region[];
   readonly points: readonly MapPoint[];
+  readonly tracks: readonly Track[];
   /** Where the equations end, for what is drawn beyond. */
   readonly validity: { readonly T: readonly [number, number]; readonly pmax: number };
-  /** Ids of states that lie outside the frame. */
+  /** Ids of states, of paths' too, that lie outside the frame. */
   readonly outside: readonly string[];
 }
 
 export interface Results {
   readonly sites: readonly SiteResult[];
   readonly states: readonly StateResult[];
+  readonly paths: readonly PathResult[];
   readonly maps: readonly MapResult[];
   readonly cautions: readonly Caution[];
   /** Formulations used, by substance id, the fluid's first. */

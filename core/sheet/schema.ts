@@ -1,7 +1,16 @@
 import * as v from 'valibot';
+import { startSchema } from '../process/path.ts';
+import { stepSchema } from '../process/steps/index.ts';
 
 /** Bounds on what a sheet may hold; far above any real one. */
-export const limits = { items: 500, sites: 50, views: 20, text: 2000, name: 200 } as const;
+export const limits = {
+  items: 500,
+  steps: 200,
+  sites: 50,
+  views: 20,
+  text: 2000,
+  name: 200,
+} as const;
 
 const id = v.pipe(v.string(), v.regex(/^[a-z0-9][a-z0-9-]{0,63}$/));
 const name = v.pipe(v.string(), v.maxLength(limits.name));
@@ -48,7 +57,15 @@ export const stateSchema = v.strictObject({
   vapourFraction: v.optional(reading),
 });
 
-export const itemSchema = v.variant('kind', [stateSchema]);
+/** A planned run: its states are shown A1, A2, …; each step's id is permanent within the path. */
+export const pathSchema = v.strictObject({
+  ...item,
+  kind: v.literal('path'),
+  start: startSchema,
+  steps: v.pipe(v.array(stepSchema), v.maxLength(limits.steps)),
+});
+
+export const itemSchema = v.variant('kind', [stateSchema, pathSchema]);
 
 const range = v.nullable(v.strictTuple([reading, reading]));
 
@@ -111,5 +128,6 @@ type DeepReadonly<T> = T extends object ? { readonly [K in keyof T]: DeepReadonl
 export type Sheet = DeepReadonly<v.InferOutput<typeof sheetSchema>>;
 export type Site = DeepReadonly<v.InferOutput<typeof siteSchema>>;
 export type StateItem = DeepReadonly<v.InferOutput<typeof stateSchema>>;
+export type PathItem = DeepReadonly<v.InferOutput<typeof pathSchema>>;
 export type Item = DeepReadonly<v.InferOutput<typeof itemSchema>>;
 export type View = DeepReadonly<v.InferOutput<typeof viewSchema>>;

@@ -3,7 +3,7 @@ import type { Substance } from './substance.ts';
 const melting = {
   kind: 'polynomial',
   source: 'Span, Wagner 1996, eq. 3.10',
-  range: { Tmin: 216.592, Tmax: 327.7 },
+  range: { Tmin: 216.592, Tmax: 328.6319 },
   reducing: { T: 216.592, p: 517950 },
   a: [1955.539, 2055.4593],
 } as const;
@@ -239,7 +239,8 @@ export const carbonDioxide: Substance = {
         source: 'Span, Wagner 1996, eq. 3.10, beyond its data, scaled by 0.9885 to join at 500 MPa',
         reducing: { T: 216.592, p: 511973.7965 },
       },
-      range: { Tmin: 294.8946, Tmax: 327.7 },
+      // Up to the 800 MPa at which the fluid's equation ends.
+      range: { Tmin: 294.8946, Tmax: 328.6319 },
     },
   ],
   sublimation: [

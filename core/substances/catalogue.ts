@@ -33,10 +33,11 @@ export const catalogue: readonly CatalogueEntry[] = [
 const subscripts = '₀₁₂₃₄₅₆₇₈₉';
 const plain = (text: string): string =>
   text
-    .trim()
     .toLowerCase()
     .replace(/[₀-₉]/g, (d) => String(subscripts.indexOf(d)))
-    .replace(/[\s_-]+/g, ' ');
+    // Dashes of every length, as word processors make them of a hyphen.
+    .replace(/[\s_\-\u2010-\u2015\u2212]+/g, ' ')
+    .trim();
 
 /**
  * Entries that answer to a word: catalogue id, name, formula, CAS number or ISO 817 designation.

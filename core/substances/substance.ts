@@ -40,6 +40,10 @@ export interface Substance {
     readonly pressure: AuxiliaryEquation;
     readonly liquidDensity: AuxiliaryEquation;
     readonly vapourDensity: AuxiliaryEquation;
+    /** Enthalpy and entropy on the line, where they are published apart from the fluid equation. */
+    readonly caloric?: SaturationCaloricEquation;
+    /** The saturation line of the formulation that plant calculations use, where there is one. */
+    readonly industrial?: IndustrialSaturationEquation;
   };
   readonly uncertainty: readonly Uncertainty[];
   readonly hazards: readonly Hazard[];
@@ -308,5 +312,40 @@ export interface AuxiliaryEquation {
   readonly a: readonly number[];
   readonly t: readonly number[];
   readonly range: Range;
+  readonly source: string;
+}
+
+/**
+ * With θ = T/T*: α/α0 = dα + d1 θ^−19 + d2 θ + d3 θ^4.5 + d4 θ^5 + d5 θ^54.5 and
+ * φ T* / α0 = dφ + (19/20) d1 θ^−20 + d2 ln θ + (9/7) d3 θ^3.5 + (5/4) d4 θ^4 + (109/107) d5 θ^53.5.
+ */
+export interface SaturationCaloricEquation {
+  readonly T: number;
+  readonly alpha0: number;
+  readonly dAlpha: number;
+  readonly dPhi: number;
+  readonly d: readonly [number, number, number, number, number];
+  readonly range: Range;
+  readonly source: string;
+}
+
+/**
+ * With y = (p / 1 MPa)^¼ and v = T + n9 / (T − n10):
+ * y²v² + n1 y²v + n2 y² + n3 yv² + n4 yv + n5 y + n6 v² + n7 v + n8 = 0.
+ */
+export interface IndustrialSaturationEquation {
+  readonly n: readonly [
+    number,
+    number,
+    number,
+    number,
+    number,
+    number,
+    number,
+    number,
+    number,
+    number,
+  ];
+  readonly range: Range & { readonly pmin: number; readonly pmax: number };
   readonly source: string;
 }

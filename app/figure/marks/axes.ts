@@ -1,9 +1,9 @@
-import { scale } from '../../../core/map/plane.ts';
+import { scale, type Scale } from '../../../core/map/plane.ts';
 import { formatReading, parseReading, type UnitId } from '../../../core/units/index.ts';
 import { mmPerPoint, type Point, type Shape, type TextRun } from '../scene/scene.ts';
 import type { Mark, MarkView } from '../mark.ts';
 import { type } from '../page.ts';
-import { axisTicks, type Tick } from '../ticks.ts';
+import { axisTicks, type Reading, type Tick } from '../ticks.ts';
 import { em, measure } from '../type/measure.ts';
 
 /** One scale at one side of the frame. */
@@ -37,6 +37,17 @@ function pressureTitle(
   ];
 }
 
+/** Ticks along the page's width: 10 mm apart, or as far as their numbers are wide. */
+function spacedTicks(s: Scale, length: number, reading: Reading): readonly Tick[] {
+  let spacing = 10;
+  for (;;) {
+    const ticks = axisTicks(s, length, spacing, reading);
+    const widest = Math.max(0, ...ticks.map(({ label }) => measure(label ?? [], type.tick)));
+    if (widest + 2 <= spacing || spacing > length) return ticks;
+    spacing = widest + 2.1;
+  }
+}
+
 function axesOf(v: MarkView): readonly Axis[] {
   const { view, map, words, results, sheet } = v;
   const T = scale(map.T.kind, map.T.range);
@@ -49,7 +60,7 @@ function axesOf(v: MarkView): readonly Axis[] {
     {
       id: 'temperature',
       side: 'bottom',
-      ticks: axisTicks(T, map.width, 13, { unit: view.temperature.unit, offset: 0, decimal }),
+      ticks: spacedTicks(T, map.width, { unit: view.temperature.unit, offset: 0, decimal }),
       title: [
         {
           text:
@@ -179,18 +190,21 @@ export const axes: Mark<Axis> = {
       ...axis.ticks.map(({ label }) => (label ? measure(label, type.tick) : 0)),
     );
     const { frame } = v;
+    const size = axis.side === 'right' ? type.tick : type.title;
+    // A title longer than its axis is high goes on downwards, not off the page.
+    const height = Math.max(frame.y + frame.height / 2, measure(axis.title, size) / 2 + 1);
     const middle: Point =
       axis.side === 'bottom'
         ? [frame.x + frame.width / 2, frame.y + frame.height + 10]
         : axis.side === 'left'
-          ? [Math.max(4, frame.x - widest - 4.2), frame.y + frame.height / 2]
-          : [frame.x + frame.width + widest + 5.2, frame.y + frame.height / 2];
+          ? [Math.max(4, frame.x - widest - 4.2), height]
+          : [frame.x + frame.width + widest + 5.2, height];
     const title: Shape = {
       kind: 'text',
       id: `title-${axis.id}`,
       at: middle,
       runs: axis.title,
-      size: axis.side === 'right' ? type.tick : type.title,
+      size,
       anchor: 'middle',
       colour,
       ...(axis.side === 'bottom' ? {} : { angle: axis.side === 'left' ? -90 : 90 }),

@@ -1,24 +1,46 @@
-import type { StateResult } from '../../../core/sheet/results.ts';
+import type { PathState, StateResult } from '../../../core/sheet/results.ts';
+import { format } from '../../../core/units/index.ts';
 import type { Mark, MarkView } from '../mark.ts';
 import { type } from '../page.ts';
 import type { LabelRequest } from '../layout/request.ts';
 import type { Shape } from '../scene/scene.ts';
+import { pathColour, pathIndex } from './paths.ts';
+
+/** A state with the colour of the path that it belongs to. */
+interface Coloured {
+  readonly s: StateResult | PathState;
+  readonly own: string;
+}
 
 const inside = (s: StateResult, { map }: MarkView): boolean => !map.outside.includes(s.id);
 
+/** What a path's state on a line is told by: "boiling, 121.1 °C". */
+function noteOf(s: StateResult | PathState, { words, view }: MarkView): string | null {
+  if (!('on' in s) || s.on === null) return null;
+  const at = format(s.T, view.temperature.unit, { decimals: 1, decimal: words.decimal });
+  return words.stateNote(words.onLine(s.on), at);
+}
+
 /** States: a dot at the true point, its error box, a tag on a short leader, and its name. */
-export const states: Mark<StateResult> = {
+export const states: Mark<Coloured> = {
   id: 'states',
   layer: 'states',
   clipped: false,
-  data: (view) =>
-    view.results.states.filter(
-      (s) =>
-        s.substance === view.map.substance && !view.view.hidden.includes(s.id) && inside(s, view),
-    ),
-  shapes: (s, { project, colours, frame }) => {
+  data: (view) => {
+    const free = view.results.states.map((s) => ({ s, own: pathColour(view, 0), of: s.id }));
+    const onPaths = view.results.paths.flatMap((path) =>
+      path.states.map((s) => ({ s, own: pathColour(view, pathIndex(view, path.id)), of: path.id })),
+    );
+    return [...free, ...onPaths].filter(
+      ({ s, of }) =>
+        s.substance === view.map.substance &&
+        !view.view.hidden.includes(s.id) &&
+        !view.view.hidden.includes(of) &&
+        inside(s, view),
+    );
+  },
+  shapes: ({ s, own }, { project, colours, frame }) => {
     const at = project(s.T, s.p);
-    const own = colours.own[0]!;
     const shapes: Shape[] = [];
     if (s.error.T > 0 || s.error.p > 0) {
       const [x0, y1] = project(s.T - s.error.T, Math.max(s.p - s.error.p, 1e-12));
@@ -49,7 +71,8 @@ export const states: Mark<StateResult> = {
     });
     return shapes;
   },
-  labels: (s, { project, colours }) => {
+  labels: ({ s, own }, view) => {
+    const { project, colours } = view;
     const at = project(s.T, s.p);
     const tag: LabelRequest = {
       kind: 'point',
@@ -58,13 +81,14 @@ export const states: Mark<StateResult> = {
       at,
       gap: 3,
       leader: true,
-      tag: colours.own[0]!,
+      tag: own,
       runs: [{ text: s.tag, bold: true }],
       size: type.label,
       colour: colours.paper,
       priority: 10,
     };
-    if (!s.name) return [tag];
+    const text = s.name ?? noteOf(s, view);
+    if (!text) return [tag];
     return [
       tag,
       {
@@ -75,12 +99,12 @@ export const states: Mark<StateResult> = {
         gap: 1.6,
         leader: true,
         plate: true,
-        runs: [{ text: s.name }],
+        runs: [{ text }],
         size: type.label,
-        colour: colours.own[0]!,
+        colour: own,
         priority: 12,
       },
     ];
   },
-  obstacles: (s, { project }) => ({ circles: [{ at: project(s.T, s.p), r: 1.2 }] }),
+  obstacles: ({ s }, { project }) => ({ circles: [{ at: project(s.T, s.p), r: 1.2 }] }),
 };
