@@ -1,6 +1,6 @@
 import { select } from 'd3';
 import { useEffect, useLayoutEffect, useMemo, useRef, useState } from 'react';
-import { composeFigure, type Figure } from '../figure/figure.ts';
+import { composeFigure, steadyLabels, type Figure, type Steady } from '../figure/figure.ts';
 import { drawScene } from '../figure/draw.ts';
 import { useApp, useWords } from './context.ts';
 import { useMapHands } from './mapHands.ts';
@@ -18,10 +18,24 @@ export function Bench() {
   const results = useApp((s) => s.results);
   const sheet = useApp((s) => s.resultsOf);
   const selected = useApp((s) => s.selected);
+  const hint = useApp((s) => s.hint);
+  const holding = useApp((s) => s.holding);
+  // Labels as they stood when the hand took hold.
+  const [steady, setSteady] = useState<Steady | null>(null);
   const figure = useMemo<Figure | null>(
-    () => (sheet && results ? composeFigure(sheet, results, sheet.views[0]!.id, words) : null),
-    [sheet, results, words],
+    () =>
+      sheet && results
+        ? composeFigure(sheet, results, sheet.views[0]!.id, words, steady ?? undefined)
+        : null,
+    [sheet, results, words, steady],
   );
+  const latest = useRef(figure);
+  useLayoutEffect(() => {
+    latest.current = figure;
+  }, [figure]);
+  useEffect(() => {
+    setSteady(holding && latest.current ? steadyLabels(latest.current) : null);
+  }, [holding]);
   const benchRef = useRef<HTMLDivElement>(null);
   const svgRef = useRef<SVGSVGElement>(null);
   const [box, setBox] = useState({ width: 800, height: 500 });
@@ -45,8 +59,11 @@ export function Bench() {
       .selectAll<SVGElement, unknown>('[data-of]')
       .classed('selected', function () {
         return selected !== null && this.dataset.of === selected;
+      })
+      .classed('snapped', function () {
+        return hint !== null && hint.boundary !== null && this.dataset.of === hint.boundary;
       });
-  }, [figure, selected]);
+  }, [figure, selected, hint]);
 
   const hands = useMapHands(svgRef, figure);
   const size = figure ? fitted(figure.scene, box) : null;

@@ -120,6 +120,7 @@ export function ReadingLine() {
   const sheet = useApp((s) => s.sheet);
   const results = useApp((s) => s.results);
   const pointer = useApp((s) => s.pointer);
+  const hint = useApp((s) => s.hint);
   const [text, setText] = useState('');
   const view = sheet?.views[0];
   const medium = useMedium(view?.substance ?? sheet?.substances[0] ?? 'water');
@@ -147,7 +148,8 @@ export function ReadingLine() {
       />
       <output className="answer">{text.trim() === '' ? '' : answer(text, here, words)}</output>
       <span className="pointer">
-        {pointer && (
+        {hint && <em className="hint">{hint.text}</em>}
+        {pointer && !hint && (
           <>
             {e.underPointer}: <b>{placeText(pointer, here, words)}</b>
           </>

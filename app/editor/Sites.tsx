@@ -1,4 +1,4 @@
-import { localPressure } from '../../core/sheet/site.ts';
+import { barometerRange, localPressure } from '../../core/sheet/site.ts';
 import type { Site } from '../../core/sheet/schema.ts';
 import { format, formatReading, gaugeClasses, parseReading } from '../../core/units/index.ts';
 import { freshId, withSite } from '../store/edits.ts';
@@ -50,7 +50,10 @@ export function Sites() {
             parseReading(text, 'pressure', { defaultUnit: 'kPa', defaultKind: 'absolute' }),
           );
           if ('trouble' in read) return read.trouble;
-          if (read.ok.kind !== 'absolute' || !(read.ok.value > 20e3 && read.ok.value < 120e3))
+          if (
+            read.ok.kind !== 'absolute' ||
+            !(read.ok.value >= barometerRange.min && read.ok.value <= barometerRange.max)
+          )
             return e.barometerRange;
           return put((now) => ({ ...now, barometer: read.ok.text }));
         }

@@ -96,6 +96,7 @@ export function useMapHands(svgRef: RefObject<SVGSVGElement | null>, figure: Fig
     drag.current = dragTarget(figure, target?.dataset.of ?? null, at);
     store.getState().select(drag.current.item);
     store.getState().settle();
+    store.getState().hold(true);
     event.currentTarget.setPointerCapture(event.pointerId);
   };
   const onPointerMove = (event: PointerEvent): void => {
@@ -116,12 +117,14 @@ export function useMapHands(svgRef: RefObject<SVGSVGElement | null>, figure: Fig
       if (Math.hypot(dx * frame.width, dy * frame.height) < 0.6 && !from.moved) return;
       from.moved = true;
       setRanges(store, from.figure, panned(from.figure.view.map, dx, dy), 'move the map', 'pan');
-    } else drag.current.move(store, figure, at);
+    } else drag.current.move(store, figure, at, event.altKey);
   };
   const onPointerUp = (event: PointerEvent): void => {
     if (!drag.current) return;
     const was = drag.current;
     drag.current = null;
+    store.getState().hintAt(null);
+    store.getState().hold(false);
     event.currentTarget.releasePointerCapture(event.pointerId);
     store.getState().settle();
     if (was.kind === 'map' && !was.moved) store.getState().select(null);

@@ -198,7 +198,7 @@ function reshaped(step: Step, kind: Step['kind'], word: string, place: StepPlace
     ...(rate !== undefined && kind !== 'hold' ? { rate } : {}),
     ...(vapour !== undefined ? { vapour } : {}),
     end: ends[word]!,
-  } as Step;
+  };
 }
 
 /** The step after a figure in its sentence was changed; throws ReadingError for what cannot be read. */

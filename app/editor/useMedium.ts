@@ -1,13 +1,13 @@
 import { useEffect, useState } from 'react';
 import { medium, type Medium } from '../../core/equilibrium/medium.ts';
-import { loadSubstance } from '../../core/substances/catalogue.ts';
+import { substanceOf } from '../worker/evaluateSheet.ts';
 
 /** A substance made ready on the page itself, for answers under the pointer; null while it loads. */
 export function useMedium(id: string): Medium | null {
   const [ready, setReady] = useState<Medium | null>(null);
   useEffect(() => {
     let wanted = true;
-    void loadSubstance(id).then((substance) => {
+    void substanceOf(id).then((substance) => {
       if (wanted && substance) setReady(medium(substance));
     });
     return () => {

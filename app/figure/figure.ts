@@ -4,6 +4,7 @@ import type { Sheet } from '../../core/sheet/schema.ts';
 import type { Words } from '../words/en.ts';
 import { printColours } from './colours.ts';
 import { layout, type PlacedBox } from './layout/layout.ts';
+import { anchorOf } from './layout/moved.ts';
 import type { LabelRequest } from './layout/request.ts';
 import type { Mark, MarkView } from './mark.ts';
 import { axes, grid } from './marks/axes.ts';
@@ -16,7 +17,14 @@ import { points } from './marks/points.ts';
 import { regions } from './marks/regions.ts';
 import { states } from './marks/states.ts';
 import { captionText, pageOf, type } from './page.ts';
-import { layers, type LayerId, type Scene, type SceneLayer, type Shape } from './scene/scene.ts';
+import {
+  layers,
+  type LayerId,
+  type Point,
+  type Scene,
+  type SceneLayer,
+  type Shape,
+} from './scene/scene.ts';
 
 /** What a mark makes of a view, its kind of data forgotten. */
 const applied =
@@ -55,15 +63,31 @@ export interface Figure {
   readonly requests: readonly LabelRequest[];
 }
 
+/** Where labels stand from their anchors, to be kept while something is dragged. */
+export type Steady = ReadonlyMap<string, Point>;
+
+/** The labels of a figure as they stand now. */
+export function steadyLabels({ boxes, requests, view }: Figure): Steady {
+  const asked = new Map(requests.map((request) => [request.id, request]));
+  return new Map(
+    boxes.map(({ id, box }): [string, Point] => {
+      const [x, y] = anchorOf(asked.get(id)!, view.frame);
+      return [id, [box.x - x, box.y - y]];
+    }),
+  );
+}
+
 /**
  * The figure of one view of a sheet: results become marks, marks shapes and label requests, layout
  * places the labels, and all of it lies on the page in mm. Pure; the same for screen and export.
+ * `steady` keeps labels in place during a drag; nothing else does.
  */
 export function composeFigure(
   sheet: Sheet,
   results: Results,
   viewId: string,
   words: Words,
+  steady?: Steady,
 ): Figure {
   const view = sheet.views.find(({ id }) => id === viewId) ?? sheet.views[0]!;
   const map = results.maps.find((m) => m.view === view.id)!;
@@ -103,7 +127,7 @@ export function composeFigure(
     .flatMap(({ labels }) => labels)
     .filter(({ id }) => !view.hidden.includes(`label-${id}`))
     .map((request) => {
-      const offset = view.labelOffsets[request.id];
+      const offset = view.labelOffsets[request.id] ?? steady?.get(request.id);
       return offset ? { ...request, offset } : request;
     });
   const met = made.flatMap(({ obstacles }) => obstacles);

@@ -646,6 +646,8 @@ export const en = {
     left: 'Left as vapour',
     trouble: 'Not reached',
     step: 'Step',
+    levelT: (tag: string): string => `temperature of ${tag}`,
+    levelP: (tag: string): string => `pressure of ${tag}`,
     addStep: 'Add a step',
     addPath: 'Plan a run',
     total: 'Whole run',

@@ -8,13 +8,22 @@ import { en } from '../words/en.ts';
 
 const loaded = new Map<string, Substance>();
 
+/** A substance that has been loaded on this thread already, else undefined. */
+export const loadedSubstance = (id: string): Substance | undefined => loaded.get(id);
+
+/** Loads a substance once; null where the catalogue has none. */
+export async function substanceOf(id: string): Promise<Substance | null> {
+  const ready = loaded.get(id);
+  if (ready) return ready;
+  const substance = await loadSubstance(id);
+  if (substance) loaded.set(id, substance);
+  return substance;
+}
+
 /** Results of a sheet, its substances loaded first and kept. Throws for a substance not known. */
 export async function evaluateSheet(sheet: Sheet): Promise<Results> {
   for (const id of sheet.substances) {
-    if (loaded.has(id)) continue;
-    const substance = await loadSubstance(id);
-    if (!substance) throw new RangeError(`no such substance: ${id}`);
-    loaded.set(id, substance);
+    if (!(await substanceOf(id))) throw new RangeError(`no such substance: ${id}`);
   }
   return evaluate(sheet, loaded, frameOf(sheet, en));
 }

@@ -84,7 +84,7 @@ const evaluateState = kept(function evaluateState(
     problem,
     margins: met,
     error,
-    touches: touched(met, error),
+    touches: state ? touched(m, state, error) : null,
   };
 });
 

@@ -62,7 +62,7 @@ export const evaluatePath = kept(function evaluatePath(
       problem: null,
       margins: found,
       error,
-      touches: touched(found, error),
+      touches: touched(m, state, error),
       on: stand.on,
       mass: stand.mass,
     };

@@ -13,7 +13,7 @@ import {
   type StateItem,
   type View,
 } from './schema.ts';
-import { localPressure } from './site.ts';
+import { barometerRange, localPressure, siteErrors } from './site.ts';
 
 /** What is wrong at one place of a sheet; the place reads like `items[3].p`. */
 export type SheetIssue = { readonly place: string } & (
@@ -78,14 +78,15 @@ export function readSheet(data: unknown): ReadSheet {
 
 function check(sheet: Sheet): readonly SheetIssue[] {
   const issues: SheetIssue[] = [];
-  const read = (place: string, given: string | undefined, quantity: Quantity): Reading | null => {
+  const read = (
+    place: string,
+    given: string | undefined,
+    quantity: Quantity,
+    defaultKind: 'gauge' | 'absolute' = sheet.pressureKind,
+  ): Reading | null => {
     if (given === undefined) return null;
     try {
-      return parseReading(
-        given,
-        quantity,
-        quantity === 'pressure' ? { defaultKind: sheet.pressureKind } : {},
-      );
+      return parseReading(given, quantity, quantity === 'pressure' ? { defaultKind } : {});
     } catch (error) {
       if (!(error instanceof ReadingError)) throw error;
       issues.push({ place, code: 'reading', given, issue: error.issue });
@@ -106,6 +107,19 @@ function check(sheet: Sheet): readonly SheetIssue[] {
       issues.push({ place, code: 'reading', given: given!, issue: error.issue });
       return null;
     }
+  };
+  /** A barometer reads the air itself: an absolute pressure that air can have. */
+  const readBarometer = (place: string, given: string | undefined): void => {
+    const reading = read(`${place}.barometer`, given, 'pressure', 'absolute');
+    if (!reading) return;
+    const { min, max } = barometerRange;
+    if (reading.kind !== 'absolute' || !(reading.value >= min && reading.value <= max))
+      issues.push({
+        place: `${place}.barometer`,
+        code: 'shape',
+        expected: `${min / 1000} kPa(a) to ${max / 1000} kPa(a)`,
+        received: given!,
+      });
   };
   const siteOf = (place: string, given: string | undefined): Site | undefined => {
     if (given === undefined) return sheet.sites[0];
@@ -131,7 +145,7 @@ function check(sheet: Sheet): readonly SheetIssue[] {
   sheet.sites.forEach((site, i) => {
     const place = `sites[${i}]`;
     read(`${place}.altitude`, site.altitude, 'altitude');
-    read(`${place}.barometer`, site.barometer, 'pressure');
+    readBarometer(place, site.barometer);
     read(`${place}.barometerError`, site.barometerError, 'pressureDifference');
     read(`${place}.probe`, site.probe, 'temperatureDifference');
     if (site.gauge && 'plusMinus' in site.gauge)
@@ -140,17 +154,25 @@ function check(sheet: Sheet): readonly SheetIssue[] {
       read(`${place}.gauge.low`, site.gauge.low, 'pressure');
       read(`${place}.gauge.high`, site.gauge.high, 'pressure');
     }
-    if (issues.length === 0) {
-      try {
-        localPressure(site);
-      } catch {
+    if (issues.length > 0) return;
+    try {
+      localPressure(site);
+      siteErrors(site, 'gauge');
+    } catch (error) {
+      if (error instanceof ReadingError)
+        issues.push({
+          place: `${place}.gauge`,
+          code: 'reading',
+          given: site.gauge && 'high' in site.gauge ? site.gauge.high : '',
+          issue: error.issue,
+        });
+      else
         issues.push({
           place: `${place}.altitude`,
           code: 'shape',
           expected: '−2000 m to 11000 m',
           received: site.altitude ?? '',
         });
-      }
     }
   });
   if (issues.length > 0) return issues;
@@ -264,6 +286,8 @@ function check(sheet: Sheet): readonly SheetIssue[] {
       read(`${place}.temperature.range[${k}]`, given, 'temperature'),
     );
     ordered(`${place}.temperature.range`, T?.[0]?.value, T?.[1]?.value);
+    if (view.temperature.scale === 'reciprocal' && T?.[0]?.value === 0)
+      issues.push({ place: `${place}.temperature.range[0]`, code: 'emptyRange' });
     const p = view.pressure.range?.map((given, k) => {
       const at = `${place}.pressure.range[${k}]`;
       // An axis may start at zero, where no state can be.

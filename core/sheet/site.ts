@@ -8,6 +8,9 @@ import {
 } from '../units/index.ts';
 import type { Site } from './schema.ts';
 
+/** Absolute pressures (Pa) that a barometer can show where people work; common practice, no source. */
+export const barometerRange = { min: 20e3, max: 120e3 } as const;
+
 /**
  * Absolute pressure of the air at a site (Pa): its barometer, else the standard atmosphere at its
  * altitude (ISO 2533), else 101.325 kPa. Throws OutOfRange for an altitude the standard does not

@@ -1,14 +1,24 @@
-import type { Margin } from '../map/margins.ts';
+import type { Medium } from '../equilibrium/medium.ts';
+import { boundaryCurves } from '../map/boundary.ts';
 
-/** The boundary inside the limits of error, if any. */
+/**
+ * The boundary that crosses the box of a state's limits of error (± K, ± Pa), if any.
+ *
+ * Every boundary is single-valued in T, so over the box's temperatures it runs between its pressures
+ * at their ends; the box is touched where those and the box's pressures overlap.
+ */
 export function touched(
-  met: readonly Margin[],
+  m: Medium,
+  { T, p }: { readonly T: number; readonly p: number },
   error: { readonly T: number; readonly p: number },
 ): string | null {
-  for (const margin of met) {
-    if (margin.boundary === null) continue;
-    const thermal = margin.direction === 'warmer' || margin.direction === 'colder';
-    if (margin.distance <= (thermal ? error.T : error.p)) return margin.boundary;
+  if (!(error.T > 0 || error.p > 0)) return null;
+  for (const curve of boundaryCurves(m)) {
+    const cold = Math.max(T - error.T, curve.T[0]);
+    const warm = Math.min(T + error.T, curve.T[1]);
+    if (cold > warm || p + error.p < curve.p[0] || p - error.p > curve.p[1]) continue;
+    const ends = [curve.atTemperature(cold).p, curve.atTemperature(warm).p];
+    if (Math.max(...ends) >= p - error.p && Math.min(...ends) <= p + error.p) return curve.id;
   }
   return null;
 }

@@ -44,7 +44,8 @@ describe.each(media)('densityAt, $substance.id', (m) => {
       for (const share of [1e-3, 1e-6, 1e-8, 1e-10, 0, -1e-10, -1e-8, -1e-6, -1e-3]) {
         const T = critical.T - gap;
         const p = critical.p * (1 - share);
-        if (T < critical.T && Math.abs(p / saturationAt(m, T).p - 1) < onBoundary) continue;
+        // 1e-9 in T is up to 8e-9 in p here.
+        if (T < critical.T && Math.abs(p / saturationAt(m, T).p - 1) < 10 * onBoundary) continue;
         const found = stablePhase(m, T, p);
         m.fluid.evaluate(T, found.rho!);
         expect(Math.abs(pressure(m.fluid) - p)).toBeLessThan(1e-9 * p);

@@ -41,7 +41,8 @@ describe.each(demos)('evaluate(…) of %s', (_, data) => {
   });
 
   it('says of each state its place, and problem or parts whose fractions make one', () => {
-    const { states } = resultsOf(data);
+    const results = resultsOf(data);
+    const states = [...results.states, ...results.paths.flatMap((path) => path.states)];
     expect(states.length).toBeGreaterThan(0);
     for (const { state: at, problem, margins } of states) {
       expect(at === null).toBe(problem !== null);
