@@ -1,4 +1,6 @@
+import console from 'node:console';
 import { readFileSync } from 'node:fs';
+import process from 'node:process';
 
 const { numPassedTests, numFailedTests, success } = JSON.parse(
   readFileSync('test-results.json', 'utf8'),

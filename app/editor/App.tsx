@@ -1,6 +1,6 @@
 import { useEffect } from 'react';
 import type { Shelf } from '../store/shelf.ts';
-import { removed } from '../store/pathEdits.ts';
+import { duplicated, removed } from '../store/pathEdits.ts';
 import { openFile } from './actions.ts';
 import { Bench } from './Bench.tsx';
 import { useApp, useAppStore, useWords } from './context.ts';
@@ -24,7 +24,13 @@ function usePageHands(): void {
         if (event.shiftKey) store.getState().redo();
         else store.getState().undo();
       } else if (command && key === 'y' && !typing) store.getState().redo();
-      else if ((event.key === 'Delete' || event.key === 'Backspace') && !typing) {
+      else if (command && key === 'd' && !typing) {
+        const { sheet, selected } = store.getState();
+        const made = sheet && selected ? duplicated(sheet, selected) : null;
+        if (!made) return;
+        store.getState().edit('duplicate', () => made.sheet);
+        store.getState().select(made.id);
+      } else if ((event.key === 'Delete' || event.key === 'Backspace') && !typing) {
         const { selected, sheet } = store.getState();
         if (!sheet || selected === null || removed(sheet, selected) === sheet) return;
         store.getState().edit('remove', (s) => removed(s, selected));

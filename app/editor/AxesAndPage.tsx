@@ -11,6 +11,7 @@ import { withView } from '../store/edits.ts';
 import type { Sentence, Slot } from '../words/sentence.ts';
 import { useApp, useAppStore, useWords } from './context.ts';
 import { Figured } from './Figured.tsx';
+import { Folding } from './Folding.tsx';
 import { withRanges } from './mapHands.ts';
 import { tried } from './say.ts';
 
@@ -266,8 +267,7 @@ export function AxesAndPage() {
     ],
   ];
   return (
-    <section aria-labelledby="axes-and-page">
-      <h2 id="axes-and-page">{e.axesAndPage}</h2>
+    <Folding title={e.axesAndPage}>
       <dl className="sentences">
         {rows.map(([name, sentence]) => (
           <div key={name}>
@@ -291,6 +291,6 @@ export function AxesAndPage() {
           {e.showRun}
         </button>
       </p>
-    </section>
+    </Folding>
   );
 }

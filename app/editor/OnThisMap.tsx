@@ -1,5 +1,6 @@
 import { withView } from '../store/edits.ts';
 import { useApp, useAppStore, useWords } from './context.ts';
+import { Folding } from './Folding.tsx';
 
 /** What is on the map: boundaries and items, to choose and to hide. */
 export function OnThisMap() {
@@ -39,8 +40,7 @@ export function OnThisMap() {
     </li>
   );
   return (
-    <section aria-labelledby="on-this-map">
-      <h2 id="on-this-map">{words.editor.onThisMap}</h2>
+    <Folding title={words.editor.onThisMap}>
       <ul className="things">
         {map?.boundaries.map((b) =>
           row(
@@ -53,8 +53,15 @@ export function OnThisMap() {
             words.basisShort[b.basis],
           ),
         )}
-        {sheet.items.map((item) => row(item.id, item.tag, item.name ?? words.editor.state, ''))}
+        {sheet.items.map((item) =>
+          row(
+            item.id,
+            item.tag,
+            item.name ?? (item.kind === 'path' ? words.editor.run : words.editor.state),
+            '',
+          ),
+        )}
       </ul>
-    </section>
+    </Folding>
   );
 }

@@ -155,21 +155,21 @@ export function RunTable() {
       return null;
     };
 
-  const middle = () => {
+  /** Where a new state or run begins: the air of the place, at room temperature or on the map. */
+  const beginning = () => {
     const map = results?.maps[0];
     if (!map) return null;
-    const T = (map.T.range[0] + map.T.range[1]) / 2;
-    const p =
-      view.pressure.scale === 'logarithmic'
-        ? Math.sqrt(map.p.range[0] * map.p.range[1])
-        : (map.p.range[0] + map.p.range[1]) / 2;
+    const [low, high] = map.T.range;
+    const room = 293.15;
+    const T = room > low && room < high ? room : (low + high) / 2;
+    const local = localOf(null);
     return {
-      T: temperatureReading(T, view.temperature.unit, (map.T.range[1] - map.T.range[0]) / 200).text,
-      p: pressureReading(p, usualUnit, sheet.pressureKind, localOf(null), p / 100).text,
+      T: temperatureReading(T, view.temperature.unit, 1).text,
+      p: pressureReading(local, usualUnit, sheet.pressureKind, local, 1000).text,
     };
   };
   const addState = (): void => {
-    const at = middle();
+    const at = beginning();
     if (!at) return;
     const id = freshId(sheet, 'state');
     const tag = freshTag(sheet);
@@ -180,7 +180,7 @@ export function RunTable() {
     store.getState().select(id);
   };
   const addPath = (): void => {
-    const at = middle();
+    const at = beginning();
     if (!at) return;
     const path = newPath(sheet, at);
     store.getState().edit(`plan run ${path.tag}`, (s) => ({ ...s, items: [...s.items, path] }));

@@ -1,8 +1,10 @@
 import { format } from '../../core/units/index.ts';
 import type { StepResult } from '../../core/sheet/results.ts';
-import { removed } from '../store/pathEdits.ts';
+import { withItem } from '../store/edits.ts';
+import { duplicated, partsOf, removed } from '../store/pathEdits.ts';
 import type { Words } from '../words/en.ts';
 import { useApp, useAppStore, useWords } from './context.ts';
+import { Figured } from './Figured.tsx';
 import { stateFacts } from './stateFacts.ts';
 
 /** What a step costs and meets, in rows. */
@@ -29,6 +31,36 @@ function stepFacts(step: StepResult, words: Words): readonly (readonly [string, 
       : []),
     ...(step.problem ? [[e.trouble, words.stepProblem(step.problem)] as const] : []),
   ];
+}
+
+/** What the user calls a selected state or run, and at which site it is read. */
+function ItemSaying({ id }: { readonly id: string }) {
+  const store = useAppStore();
+  const words = useWords();
+  const sheet = useApp((s) => s.sheet)!;
+  const item = partsOf(sheet, id)?.path ?? sheet.items.find((x) => x.id === id);
+  if (!item) return null;
+  return (
+    <p className="site">
+      <Figured
+        sentence={words.itemSentence(
+          { tag: item.tag, name: item.name ?? '', site: item.site ?? sheet.sites[0]?.id ?? '' },
+          sheet.sites.map((site) => ({ value: site.id, label: site.name })),
+        )}
+        commit={(field, text) => {
+          store.getState().edit(`change ${item.tag}`, (s) =>
+            withItem(s, item.id, (now) => {
+              if (field === 'site') return { ...now, site: text };
+              const { name: old, ...rest } = now;
+              const name = text.trim().slice(0, 200);
+              return name === '' && old !== undefined ? rest : { ...rest, ...(name && { name }) };
+            }),
+          );
+          return null;
+        }}
+      />
+    </p>
+  );
 }
 
 /** What is selected, and what is true of it. */
@@ -72,6 +104,7 @@ export function Selected() {
   return (
     <section aria-live="polite">
       <h2>{state ? e.selected(state.tag, state.name) : e.step}</h2>
+      <ItemSaying id={selected} />
       <dl>
         {facts.map(([name, text], i) => (
           <div key={`${name}${i}`}>
@@ -82,6 +115,16 @@ export function Selected() {
       </dl>
       {removable && (
         <p className="actions">
+          <button
+            onClick={() => {
+              const made = duplicated(sheet, selected);
+              if (!made) return;
+              store.getState().edit(`duplicate ${state?.tag ?? ''}`, () => made.sheet);
+              store.getState().select(made.id);
+            }}
+          >
+            {e.duplicate}
+          </button>
           <button
             onClick={() =>
               store.getState().edit(`remove ${state?.tag ?? e.step}`, (s) => removed(s, selected))

@@ -5,6 +5,7 @@ import { freshId, withSite } from '../store/edits.ts';
 import type { Sentence } from '../words/sentence.ts';
 import { useApp, useAppStore, useWords } from './context.ts';
 import { Figured } from './Figured.tsx';
+import { Folding } from './Folding.tsx';
 import { tried } from './say.ts';
 
 type Editable = { -readonly [K in keyof Site]: Site[K] };
@@ -125,8 +126,7 @@ export function Sites() {
   };
 
   return (
-    <section aria-labelledby="sites">
-      <h2 id="sites">{e.sites}</h2>
+    <Folding title={e.sites}>
       {sheet.sites.map((site) => (
         <p key={site.id} className="site">
           <Figured sentence={sentence(site)} commit={commit(site)} />
@@ -151,6 +151,6 @@ export function Sites() {
           {e.addSite}
         </button>
       </p>
-    </section>
+    </Folding>
   );
 }

@@ -78,6 +78,19 @@ export function StartScreen({ shelf }: { readonly shelf: Shelf }) {
                   {new Date(saved).toLocaleString(words.language)}
                 </span>
                 <button
+                  onClick={() => {
+                    const copy: Kept = {
+                      key: newKey(),
+                      sheet: { ...sheet, title: e.copyOf(sheet.title) },
+                      saved: Date.now(),
+                      by: 'copy',
+                    };
+                    void shelf.put(copy).then(() => setKept([copy, ...kept]));
+                  }}
+                >
+                  {e.copy}
+                </button>
+                <button
                   aria-label={e.removeSheet(sheet.title)}
                   onClick={() =>
                     void shelf.remove(key).then(() => setKept(kept.filter((k) => k.key !== key)))

@@ -1,6 +1,6 @@
 import type { Step } from '../../core/process/steps/index.ts';
 import type { PathItem, Sheet } from '../../core/sheet/schema.ts';
-import { freshId, withItem } from './edits.ts';
+import { freshId, freshTag, withItem } from './edits.ts';
 
 /** A sheet with one path changed; other items and other kinds stay. */
 export const withPath = (sheet: Sheet, id: string, change: (path: PathItem) => PathItem): Sheet =>
@@ -55,4 +55,20 @@ export function removed(sheet: Sheet, id: string): Sheet {
     ...path,
     steps: path.steps.filter((s) => s !== step),
   }));
+}
+
+/** A sheet with a second one of an item, under an id and a tag of its own; null where there is none. */
+export function duplicated(sheet: Sheet, id: string): { sheet: Sheet; id: string } | null {
+  const parts = partsOf(sheet, id);
+  const item = parts?.path ?? sheet.items.find((x) => x.id === id);
+  if (!item) return null;
+  const copy = {
+    ...item,
+    id: freshId(sheet, item.kind),
+    tag: item.kind === 'path' ? freshLetter(sheet) : freshTag(sheet),
+  };
+  return {
+    sheet: { ...sheet, items: [...sheet.items, copy] },
+    id: copy.kind === 'path' ? `${copy.id}.start` : copy.id,
+  };
 }

@@ -636,9 +636,13 @@ export const en = {
     add: 'Add a state',
     remove: 'Remove',
     duplicate: 'Duplicate',
+    copy: 'Copy',
+    copyOf: (title: string): string => `${title || 'Untitled sheet'}, copy`,
+    fold: (what: string): string => `Fold ${what.toLowerCase()}`,
     close: 'Close',
     dismiss: 'Dismiss',
     state: 'State',
+    run: 'Run',
     heat: 'Heat',
     clock: 'Clock',
     meets: 'Meets',
@@ -817,6 +821,22 @@ export const en = {
     ];
   },
 
+  /** What an item is called and where it is read. */
+  itemSentence: (
+    item: { readonly tag: string; readonly name: string; readonly site: string },
+    sites: readonly { readonly value: string; readonly label: string }[],
+  ): Sentence => [
+    'Called ',
+    { field: 'name', text: item.name, name: `name of ${item.tag}`, hint: 'nothing yet' },
+    ...(sites.length > 1
+      ? [
+          ', read at ',
+          { field: 'site', text: item.site, name: `site of ${item.tag}`, choices: sites },
+        ]
+      : []),
+    '.',
+  ],
+
   /** What a blank start asks, in one sentence. */
   startSentence: (
     start: { readonly substance: string; readonly where: string; readonly kind: string },
@@ -891,7 +911,12 @@ export const en = {
     ...(parts.end && !(parts.kind.text === 'hold' && parts.values.length === 0)
       ? [' to ', ...(parts.end.quiet ? [] : [parts.end])]
       : []),
-    ...parts.values.flatMap((slot, i) => [i === 0 ? (parts.end?.quiet ? '' : ' ') : ' and ', slot]),
+    ...parts.values.flatMap((slot, i) => [
+      i === 0 ? (parts.end?.quiet ? '' : ' ') : ' and ',
+      slot,
+      slot.field === 'end.vapourFraction' ? ` ${parts.vapourName}` : '',
+      slot.field === 'end.solidFraction' ? ' solid' : '',
+    ]),
     ...(parts.end?.quiet ? [parts.end] : []),
     parts.kind.text === 'hold' && parts.values.length === 0 ? ' for ' : ' in ',
     parts.time,

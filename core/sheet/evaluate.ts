@@ -161,11 +161,7 @@ function evaluateMap(
   const unit = view.pressure.unit as UnitId;
   const T = view.temperature.range
     ? (view.temperature.range.map((r) => parseReading(r, 'temperature').value) as [number, number])
-    : temperatureRange(
-        m,
-        run.map((s) => s.T),
-        view.temperature.unit,
-      );
+    : temperatureRange(m, run, view.temperature.unit);
   const p = view.pressure.range
     ? (view.pressure.range.map((r) => {
         const reading = parseReading(r, 'pressure', { defaultKind: sheet.pressureKind });

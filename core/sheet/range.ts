@@ -1,4 +1,5 @@
 import type { Medium } from '../equilibrium/medium.ts';
+import { saturationAtPressure } from '../equilibrium/saturation.ts';
 import { fromSI, toSI, type UnitId } from '../units/index.ts';
 
 type Ends = readonly [low: number, high: number];
@@ -17,11 +18,19 @@ function rounded([low, high]: Ends, unit: UnitId, steps: number): Ends {
   return [toSI(Math.floor(a / step) * step, unit), toSI(Math.ceil(b / step) * step, unit)];
 }
 
-/** Temperatures (K) from end to end of a run with room at both sides; the whole map without a run. */
-export function temperatureRange(m: Medium, run: readonly number[], unit: UnitId): Ends {
+/**
+ * Temperatures (K) from end to end of a run with room at both sides, its boiling points kept in
+ * sight where they are not far off; the whole map without a run.
+ */
+export function temperatureRange(
+  m: Medium,
+  places: readonly { readonly T: number; readonly p: number }[],
+  unit: UnitId,
+): Ends {
   const { validity } = m.substance.fluid;
   const { triple, critical } = m;
   const span = critical.T - triple.T;
+  const run = [...places.map(({ T }) => T), ...boilingNear(m, places)];
   if (run.length === 0)
     return rounded(
       [Math.max(validity.vapourTmin, triple.T - 0.15 * span), critical.T + 0.2 * span],
@@ -32,6 +41,18 @@ export function temperatureRange(m: Medium, run: readonly number[], unit: UnitId
   const high = Math.max(...run);
   const room = Math.max(0.22 * (high - low), 0.04 * span);
   return rounded([Math.max(validity.vapourTmin, low - room), high + room], unit, 10);
+}
+
+/** Boiling temperatures (K) at the run's pressures, those within 120 K of the state itself. */
+function boilingNear(
+  m: Medium,
+  places: readonly { readonly T: number; readonly p: number }[],
+): readonly number[] {
+  return places
+    .filter(({ p }) => p > m.triple.p && p < m.critical.p)
+    .map(({ T, p }) => ({ T, boils: saturationAtPressure(m, p).T }))
+    .filter(({ T, boils }) => Math.abs(boils - T) < 120)
+    .map(({ boils }) => boils);
 }
 
 /** Absolute pressures (Pa) of a run with room; linear axes start at zero, logarithmic ones at a decade. */

@@ -86,16 +86,11 @@ function axesOf(v: MarkView): readonly Axis[] {
       id: 'second',
       side: 'right',
       // At least 8 pt from tick to tick.
-      ticks: axisTicks(
-        p,
-        map.height,
-        view.pressure.scale === 'linear' ? 8 : 8 * mmPerPoint * 1.05,
-        {
-          unit: view.second.unit as UnitId,
-          offset: view.second.kind === 'gauge' ? local(view.second.site) : 0,
-          decimal,
-        },
-      ),
+      ticks: axisTicks(p, map.height, view.pressure.scale === 'linear' ? 8 : 4.5, {
+        unit: view.second.unit as UnitId,
+        offset: view.second.kind === 'gauge' ? local(view.second.site) : 0,
+        decimal,
+      }),
       title: pressureTitle(view.second.unit, view.second.kind, view.second.site, v),
       colour: 'muted',
       grid: false,
