@@ -38,7 +38,7 @@ interface Held {
 const pageStep = 0.25;
 
 /** Steps of temperature (K) and pressure (Pa) that a page step means at a place. */
-function stepsAt(figure: Figure, T: number, p: number): { T: number; p: number } {
+export function stepsAt(figure: Figure, T: number, p: number): { T: number; p: number } {
   const { plane } = figure.view;
   const [x, y] = plane.project({ T, p })!;
   const next = plane.invert([x + pageStep, y - pageStep]);

@@ -1,4 +1,11 @@
-import { useEffect, useRef, type KeyboardEvent, type PointerEvent, type RefObject } from 'react';
+import {
+  useEffect,
+  useRef,
+  type KeyboardEvent,
+  type MouseEvent,
+  type PointerEvent,
+  type RefObject,
+} from 'react';
 import type { Reading, UnitId } from '../../core/units/index.ts';
 import type { View } from '../../core/sheet/schema.ts';
 import type { Figure } from '../figure/figure.ts';
@@ -7,6 +14,7 @@ import { pressureReading, temperatureReading, withView } from '../store/edits.ts
 import type { AppStore } from '../store/index.ts';
 import { useAppStore } from './context.ts';
 import { dragTarget, type Drag } from './drag.ts';
+import { placeAt } from './place.ts';
 
 /** The reading with the fewest digits that says the same number as the one written to `step`. */
 function shortest(write: (step: number) => Reading, step: number): string {
@@ -59,6 +67,8 @@ function setRanges(
 export function useMapHands(svgRef: RefObject<SVGSVGElement | null>, figure: Figure | null) {
   const store = useAppStore();
   const drag = useRef<Drag | null>(null);
+  // What was selected before a first click let go of it, for a second one to build on.
+  const before = useRef<{ selected: string | null; at: number }>({ selected: null, at: 0 });
 
   const pageAt = (event: { clientX: number; clientY: number }): [number, number] => {
     const box = svgRef.current!.getBoundingClientRect();
@@ -94,6 +104,8 @@ export function useMapHands(svgRef: RefObject<SVGSVGElement | null>, figure: Fig
     const target = (event.target as Element).closest<SVGElement>('[data-of]');
     const at = pageAt(event);
     drag.current = dragTarget(figure, target?.dataset.of ?? null, at);
+    if (event.timeStamp - before.current.at > 500)
+      before.current = { selected: store.getState().selected, at: event.timeStamp };
     store.getState().select(drag.current.item);
     store.getState().settle();
     store.getState().hold(true);
@@ -167,6 +179,16 @@ export function useMapHands(svgRef: RefObject<SVGSVGElement | null>, figure: Fig
     else return;
     event.preventDefault();
   };
+  const onDoubleClick = (event: MouseEvent): void => {
+    if (!figure) return;
+    const [x, y] = pageAt(event);
+    const { frame } = figure.view;
+    const inside =
+      x > frame.x && x < frame.x + frame.width && y > frame.y && y < frame.y + frame.height;
+    if (!inside) return;
+    store.getState().select(before.current.selected);
+    placeAt(store, figure, [x, y], event.altKey);
+  };
   const onPointerLeave = (): void => store.getState().point(null);
-  return { onPointerDown, onPointerMove, onPointerUp, onPointerLeave, onKeyDown };
+  return { onPointerDown, onPointerMove, onPointerUp, onPointerLeave, onDoubleClick, onKeyDown };
 }

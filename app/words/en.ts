@@ -611,7 +611,7 @@ export const en = {
     tool: 'Simmerline',
     map: 'map',
     mapHelp:
-      'Pressure–temperature map. Arrows move the map or nudge the selected thing, plus and minus zoom, Escape lets go.',
+      'Pressure–temperature map. Arrows move the map or nudge the selected thing, plus and minus zoom, Escape lets go; a double click places a state, or a step of the selected run.',
     undo: 'Undo',
     redo: 'Redo',
     undoOf: (name: string): string => `Undo: ${name}`,

@@ -54,7 +54,9 @@ function leaderOf(request: LabelRequest, { box, leader }: Candidate): Shape | un
 
 /** Draws a label at a place. */
 export function labelShapes(request: LabelRequest, place: Candidate): LabelShapes {
-  const { box, text, anchor, angle } = place;
+  const { box, text, angle } = place;
+  // On a plate the room to spare is shared between both sides.
+  const anchor = request.plate ? 'middle' : place.anchor;
   const [u, v] = [
     anchor === 'middle' ? 0 : (box.halfWidth - text.pad) * (anchor === 'start' ? -1 : 1),
     text.baseline - box.halfHeight,
