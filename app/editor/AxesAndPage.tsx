@@ -8,6 +8,7 @@ import {
   type UnitId,
 } from '../../core/units/index.ts';
 import { withView } from '../store/edits.ts';
+import { airAt } from '../store/places.ts';
 import type { Sentence, Slot } from '../words/sentence.ts';
 import { useApp, useAppStore, useWords } from './context.ts';
 import { Figured } from './Figured.tsx';
@@ -41,9 +42,7 @@ export function AxesAndPage() {
   const map = results?.maps[0];
   const view = sheet.views[0]!;
   if (!map) return null;
-  const local =
-    results.sites.find(({ id }) => id === (view.pressure.site ?? sheet.sites[0]?.id))?.local ??
-    101325;
+  const local = airAt(sheet, results, view.pressure.site);
   const change = (name: string, make: (v: View) => View): void =>
     store.getState().edit(name, (s) => withView(s, view.id, make));
   const choices = (list: readonly string[], labels: Readonly<Record<string, string>> = {}) =>

@@ -8,10 +8,12 @@ import {
   parseReading,
   pressureAs,
   ReadingError,
+  standardPressure,
   type UnitId,
 } from '../../core/units/index.ts';
 import type { Medium } from '../../core/equilibrium/medium.ts';
 import type { Words } from '../words/en.ts';
+import { airAt } from '../store/places.ts';
 import { useApp, useWords } from './context.ts';
 import { useMedium } from './useMedium.ts';
 
@@ -128,7 +130,7 @@ export function ReadingLine() {
   const site = sheet?.sites[0];
   const here: Here = {
     medium,
-    local: results?.sites[0]?.local ?? 101325,
+    local: sheet ? airAt(sheet, results) : standardPressure,
     temperatureUnit: view?.temperature.unit ?? '°C',
     pressureUnit: (view?.second?.unit ?? view?.pressure.unit ?? 'bar') as UnitId,
     kind: view?.second?.kind ?? view?.pressure.kind ?? sheet?.pressureKind ?? 'gauge',

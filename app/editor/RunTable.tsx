@@ -17,6 +17,7 @@ import {
   withItem,
 } from '../store/edits.ts';
 import { freshStepId, newPath, removed, withPath, withStep } from '../store/pathEdits.ts';
+import { airAt, usualUnit } from '../store/places.ts';
 import type { Slot } from '../words/sentence.ts';
 import { useApp, useAppStore, useWords } from './context.ts';
 import { Figured } from './Figured.tsx';
@@ -101,16 +102,10 @@ export function RunTable() {
   const results = useApp((s) => s.results);
   const view = sheet.views[0]!;
   const { decimal } = words;
-  const localOf = (siteId: string | null | undefined): number =>
-    results?.sites.find(({ id }) => id === (siteId ?? sheet.sites[0]?.id))?.local ?? 101325;
-  /** Unit in which pressures of the sheet's kind are read. */
-  const usualUnit = (
-    sheet.pressureKind === view.pressure.kind
-      ? view.pressure.unit
-      : (view.second?.unit ?? view.pressure.unit)
-  ) as UnitId;
+  const localOf = (siteId: string | null | undefined): number => airAt(sheet, results, siteId);
+  const usual = usualUnit(sheet, view);
   const unitOf = (p: string | undefined): UnitId =>
-    p === undefined ? usualUnit : parseReading(p, 'pressure').unit;
+    p === undefined ? usual : parseReading(p, 'pressure').unit;
 
   /** A typed reading of a state's given, canonical; checked against absolute zero at its site. */
   const read = (field: string, text: string, old: string | undefined, site: string | undefined) =>
@@ -165,7 +160,7 @@ export function RunTable() {
     const local = localOf(null);
     return {
       T: temperatureReading(T, view.temperature.unit, 1).text,
-      p: pressureReading(local, usualUnit, sheet.pressureKind, local, 1000).text,
+      p: pressureReading(local, usual, sheet.pressureKind, local, 1000).text,
     };
   };
   const addState = (): void => {

@@ -1,6 +1,7 @@
 import { format } from '../../core/units/index.ts';
 import type { StepResult } from '../../core/sheet/results.ts';
 import { withItem } from '../store/edits.ts';
+import { airAt } from '../store/places.ts';
 import { duplicated, partsOf, removed } from '../store/pathEdits.ts';
 import type { Words } from '../words/en.ts';
 import { useApp, useAppStore, useWords } from './context.ts';
@@ -95,7 +96,7 @@ export function Selected() {
   const state = [...results.states, ...onPaths].find(({ id }) => id === selected);
   const step = results.paths.flatMap((path) => path.steps).find(({ id }) => id === selected);
   if (!state && !step) return null;
-  const local = results.sites.find(({ id }) => id === state?.site)?.local ?? 101325;
+  const local = airAt(sheet, results, state?.site);
   const facts = [
     ...(state ? stateFacts(state, sheet.views[0]!, local, words) : []),
     ...(step ? stepFacts(step, words) : []),

@@ -4,10 +4,11 @@ import { composeFigure } from '../figure/figure.ts';
 import { drawScene } from '../figure/draw.ts';
 import { evaluateSheet } from '../worker/evaluateSheet.ts';
 import type { Kept, Shelf } from '../store/shelf.ts';
-import { newKey, openFile } from './actions.ts';
+import { newKey } from './actions.ts';
 import { useAppStore, useWords } from './context.ts';
 import { demos, demoText } from './demos.ts';
 import { NewMap } from './NewMap.tsx';
+import { OpenButton } from './OpenButton.tsx';
 
 /** A demo sheet as a live picture. */
 function Demo({ name }: { readonly name: string }) {
@@ -56,7 +57,6 @@ export function StartScreen({ shelf }: { readonly shelf: Shelf }) {
   const words = useWords();
   const e = words.editor;
   const [kept, setKept] = useState<readonly Kept[]>([]);
-  const input = useRef<HTMLInputElement>(null);
   useEffect(() => {
     shelf.list().then(setKept, () => setKept([]));
   }, [shelf]);
@@ -113,18 +113,7 @@ export function StartScreen({ shelf }: { readonly shelf: Shelf }) {
         </ul>
       </section>
       <p className="actions">
-        <button onClick={() => input.current?.click()}>{e.openFile}</button>
-        <input
-          ref={input}
-          type="file"
-          accept=".json,.svg,application/json,image/svg+xml"
-          hidden
-          onChange={(event) => {
-            const file = event.target.files?.[0];
-            if (file) void openFile(store, words, file);
-            event.target.value = '';
-          }}
-        />
+        <OpenButton label={e.openFile} />
       </p>
     </main>
   );

@@ -1,8 +1,8 @@
-import { useRef } from 'react';
 import { format, formatReading, parseReading } from '../../core/units/index.ts';
-import { exportSvg, openFile, saveFile } from './actions.ts';
+import { exportSvg, saveFile } from './actions.ts';
 import { useApp, useAppStore, useWords } from './context.ts';
 import { Figured } from './Figured.tsx';
+import { OpenButton } from './OpenButton.tsx';
 
 /** The strip above: what sheet this is, undo and redo, files. */
 export function Strip() {
@@ -13,7 +13,6 @@ export function Strip() {
   const results = useApp((s) => s.results);
   const history = useApp((s) => s.history);
   const saved = useApp((s) => s.saved);
-  const input = useRef<HTMLInputElement>(null);
   if (!sheet) return null;
   const site = sheet.sites[0];
   const local = results?.sites[0]?.local;
@@ -55,18 +54,7 @@ export function Strip() {
         {e.redo}
       </button>
       <button onClick={() => store.getState().closeSheet()}>{e.sheets}</button>
-      <button onClick={() => input.current?.click()}>{e.open}</button>
-      <input
-        ref={input}
-        type="file"
-        accept=".json,.svg,application/json,image/svg+xml"
-        hidden
-        onChange={(event) => {
-          const file = event.target.files?.[0];
-          if (file) void openFile(store, words, file);
-          event.target.value = '';
-        }}
-      />
+      <OpenButton label={e.open} />
       <button onClick={() => saveFile(store)}>{e.save}</button>
       <button className="strong" onClick={() => void exportSvg(store, words)}>
         {e.export}

@@ -3,7 +3,7 @@ import { dragStart, runPath } from '../../core/process/path.ts';
 import type { DraggedEnd, SnapKind } from '../../core/process/step.ts';
 import { kindOf, type Step } from '../../core/process/steps/index.ts';
 import type { PathItem, StateItem } from '../../core/sheet/schema.ts';
-import { parseReading, readingFromSI, type UnitId } from '../../core/units/index.ts';
+import { parseReading, readingFromSI } from '../../core/units/index.ts';
 import type { Figure } from '../figure/figure.ts';
 import { cornersOf } from '../figure/layout/box.ts';
 import { anchorOf } from '../figure/layout/moved.ts';
@@ -11,6 +11,7 @@ import type { Point } from '../figure/scene/scene.ts';
 import { pressureReading, temperatureReading, withItem, withView } from '../store/edits.ts';
 import type { AppStore } from '../store/index.ts';
 import { partsOf, withPath, withStep } from '../store/pathEdits.ts';
+import { airAt, usualUnit } from '../store/places.ts';
 import { loadedSubstance } from '../worker/evaluateSheet.ts';
 import { landing, type Landing, type Peer } from './snap.ts';
 
@@ -48,18 +49,13 @@ export function stepsAt(figure: Figure, T: number, p: number): { T: number; p: n
 /** What writes SI values as readings of an item's own units, kinds and site, to the page's resolution. */
 function writer(figure: Figure, siteId: string | undefined, given: { T?: string; p?: string }) {
   const { results, sheet, view } = figure.view;
-  const local =
-    results.sites.find(({ id }) => id === (siteId ?? sheet.sites[0]?.id))?.local ?? 101325;
+  const local = airAt(sheet, results, siteId);
   const old = given.p === undefined ? null : parseReading(given.p, 'pressure');
   const kind =
     old === null || old.kind === undefined || old.kind === 'unstated'
       ? sheet.pressureKind
       : old.kind;
-  const usual = (
-    sheet.pressureKind === view.pressure.kind
-      ? view.pressure.unit
-      : (view.second?.unit ?? view.pressure.unit)
-  ) as UnitId;
+  const usual = usualUnit(sheet, view);
   const unit =
     given.T === undefined ? view.temperature.unit : parseReading(given.T, 'temperature').unit;
   return {
@@ -199,8 +195,7 @@ function heldStep(path: PathItem, step: Step): Held {
     const substance = loadedSubstance(path.substance ?? sheet.substances[0]!);
     const now = sheet.items.find((item) => item.id === path.id);
     if (!substance || now?.kind !== 'path') return;
-    const local =
-      results.sites.find((s) => s.id === (path.site ?? sheet.sites[0]?.id))?.local ?? 101325;
+    const local = airAt(sheet, results, path.site);
     const env = { m: medium(substance), local, pressureKind: sheet.pressureKind };
     const run = runPath(now, env).steps.find((s) => s.step.id === step.id);
     if (!run?.from) return;

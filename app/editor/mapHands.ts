@@ -12,6 +12,7 @@ import type { Figure } from '../figure/figure.ts';
 import { axesAt, panned, zoomed, type Ranges } from '../figure/gesture.ts';
 import { pressureReading, temperatureReading, withView } from '../store/edits.ts';
 import type { AppStore } from '../store/index.ts';
+import { airAt } from '../store/places.ts';
 import { useAppStore } from './context.ts';
 import { dragTarget, type Drag } from './drag.ts';
 import { placeAt } from './place.ts';
@@ -55,9 +56,7 @@ function setRanges(
   key: string,
 ): void {
   const { view, results, sheet } = figure.view;
-  const local =
-    results.sites.find(({ id }) => id === (view.pressure.site ?? sheet.sites[0]?.id))?.local ??
-    101325;
+  const local = airAt(sheet, results, view.pressure.site);
   store
     .getState()
     .edit(name, (s) => withView(s, view.id, (v) => withRanges(v, ranges, local)), key);

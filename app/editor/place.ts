@@ -1,23 +1,18 @@
 import type { Step } from '../../core/process/steps/index.ts';
-import type { UnitId } from '../../core/units/index.ts';
 import type { Figure } from '../figure/figure.ts';
 import type { Point } from '../figure/scene/scene.ts';
 import { freshId, freshTag, pressureReading, temperatureReading } from '../store/edits.ts';
 import type { AppStore } from '../store/index.ts';
 import { freshStepId, partsOf, withPath } from '../store/pathEdits.ts';
+import { airAt, usualUnit } from '../store/places.ts';
 import { stepsAt } from './drag.ts';
 import { landing, type Landing } from './snap.ts';
 
 /** Readings of a place in the units of the view and the sheet's kind of pressure. */
 function readingsAt(figure: Figure, siteId: string | undefined, { T, p }: Landing) {
   const { results, sheet, view } = figure.view;
-  const local =
-    results.sites.find(({ id }) => id === (siteId ?? sheet.sites[0]?.id))?.local ?? 101325;
-  const unit = (
-    sheet.pressureKind === view.pressure.kind
-      ? view.pressure.unit
-      : (view.second?.unit ?? view.pressure.unit)
-  ) as UnitId;
+  const local = airAt(sheet, results, siteId);
+  const unit = usualUnit(sheet, view);
   const steps = stepsAt(figure, T, p);
   return {
     T: temperatureReading(T, view.temperature.unit, steps.T).text,
@@ -52,11 +47,9 @@ export function placeAt(store: AppStore, figure: Figure, at: Point, free: boolea
   const id = freshId(sheet, 'state');
   const tag = freshTag(sheet);
   const given = kind === 'saturation' ? { T, vapourFraction: '0 %' } : { T, p };
-  store
-    .getState()
-    .edit(`add ${tag}`, (s) => ({
-      ...s,
-      items: [...s.items, { kind: 'state', id, tag, ...given }],
-    }));
+  store.getState().edit(`add ${tag}`, (s) => ({
+    ...s,
+    items: [...s.items, { kind: 'state', id, tag, ...given }],
+  }));
   store.getState().select(id);
 }
