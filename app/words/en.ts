@@ -165,6 +165,8 @@ function problemSentence(problem: StateProblem, told: ProblemTold): string {
       return `Temperature and pressure lie on the ${told.boundary(problem.boundary)}, where they do not fix the state: give a ${problem.needs}.`;
     case 'unknown':
       return `The phase is not known: ${problem.reason}.`;
+    case 'unsolved':
+      return 'The equations could not be solved here; move the state a little and tell us what you gave.';
   }
 }
 

@@ -1,4 +1,4 @@
-import { OutOfRange, Undetermined, Unknown } from '../errors.ts';
+import { NotConverged, OutOfRange, Undetermined, Unknown } from '../errors.ts';
 import type { BoundaryKind } from '../map/boundary.ts';
 import { ReadingError, type ReadingIssue } from '../units/index.ts';
 
@@ -18,7 +18,9 @@ export type StateProblem =
       readonly boundary: string;
       readonly needs: 'vapour fraction' | 'solid fraction';
     }
-  | { readonly code: 'unknown'; readonly reason: string };
+  | { readonly code: 'unknown'; readonly reason: string }
+  /** A defect of ours: the solver gave up. Told at its item, so that the rest of the sheet stands. */
+  | { readonly code: 'unsolved'; readonly solver: string };
 
 /** Why a step does not reach its end. */
 export type StepProblem =
@@ -63,6 +65,7 @@ export function problemOf(error: unknown): StateProblem {
   if (error instanceof Undetermined)
     return { code: 'onBoundary', boundary: error.boundary, needs: error.needs };
   if (error instanceof Unknown) return { code: 'unknown', reason: error.reason };
+  if (error instanceof NotConverged) return { code: 'unsolved', solver: error.solver };
   throw error;
 }
 
