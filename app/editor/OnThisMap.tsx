@@ -31,8 +31,7 @@ export function OnThisMap() {
       </button>
       <button
         className="eye"
-        aria-pressed={!view.hidden.includes(id)}
-        aria-label={words.editor.shown(name)}
+        aria-label={`${view.hidden.includes(id) ? words.editor.show : words.editor.hide} ${name}`}
         onClick={() => toggle(id)}
       >
         {view.hidden.includes(id) ? words.editor.show : words.editor.hide}

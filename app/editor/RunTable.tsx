@@ -330,12 +330,12 @@ export function RunTable() {
             </th>
             <th scope="col">{e.phase}</th>
             <th scope="col">{e.next}</th>
-            <th scope="col">{paths.length > 0 && e.meets}</th>
+            <th scope="col">{e.meets}</th>
             <th scope="col" className="number">
-              {paths.length > 0 && e.heat}
+              {e.heat}
             </th>
             <th scope="col" className="number">
-              {paths.length > 0 && e.clock}
+              {e.clock}
             </th>
           </tr>
         </thead>
