@@ -1,4 +1,5 @@
 import { createRoot } from 'react-dom/client';
+import { catalogue } from '../core/substances/catalogue.ts';
 import { App } from './editor/App.tsx';
 import { openFromText } from './editor/actions.ts';
 import { StoreContext } from './editor/context.ts';
@@ -8,7 +9,7 @@ import { browserTabs, keepSaved } from './store/autosave.ts';
 import { keepEvaluated } from './store/evaluation.ts';
 import { createAppStore } from './store/index.ts';
 import { deviceShelf } from './store/shelf.ts';
-import { evaluateSheet } from './worker/evaluateSheet.ts';
+import { evaluateSheet, substanceOf } from './worker/evaluateSheet.ts';
 import { en } from './words/en.ts';
 
 const words = en;
@@ -50,7 +51,11 @@ async function begin(): Promise<void> {
   const last = keptKey();
   const kept = last ? await shelf.take(last).catch(() => undefined) : undefined;
   if (kept) store.getState().openSheet(kept.sheet, kept.key);
-  else if (demo) openFromText(store, words, demo, await demoText(demo));
+  else if (demo)
+    await demoText(demo).then(
+      (text) => void openFromText(store, words, demo, text),
+      () => store.getState().tell('trouble', words.editor.badFile(demo, words.editor.notRead)),
+    );
 }
 
 createRoot(document.getElementById('page')!).render(
@@ -59,3 +64,8 @@ createRoot(document.getElementById('page')!).render(
   </StoreContext>,
 );
 void begin();
+
+// Every substance is at hand soon after, so that the page works on where the net is left.
+setTimeout(() => {
+  for (const { id } of catalogue) substanceOf(id).catch(() => undefined);
+}, 2000);

@@ -30,12 +30,20 @@ export class Undetermined extends Error {
   }
 }
 
+/** Why something is not known, a code that app/words spells out. */
+export type UnknownReason =
+  | 'melting not published'
+  | 'sublimation not published'
+  | 'beyond the melting line'
+  /** Only the solid's lines are published: nothing is known of its own properties. */
+  | 'no equation for the solid';
+
 /** No published equation says what is asked. */
 export class Unknown extends Error {
   override readonly name = 'Unknown';
   constructor(
-    readonly subject: string,
-    readonly reason: string,
+    readonly subject: 'phase',
+    readonly reason: UnknownReason,
   ) {
     super(`${subject} is not known: ${reason}`);
   }

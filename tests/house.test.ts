@@ -46,7 +46,8 @@ function importsOf(file: string): readonly Import[] {
     if (!specifier || !ts.isStringLiteralLike(specifier)) return;
     const name = specifier.text.replace(/\?.*$/, '');
     const to = name.startsWith('.') ? join(dirname(file), name).split(sep).join('/') : name;
-    found.push({ from: file, to, typeOnly });
+    // Tables of values are data, not modules of a room.
+    if (!to.endsWith('.json')) found.push({ from: file, to, typeOnly });
   };
   walk(sourceOf(file), (node) => {
     if (ts.isImportDeclaration(node))
@@ -68,7 +69,7 @@ const isOf = (folder: string) => (path: string) => path.startsWith(`${folder}/`)
 /** Which rooms each room of core may use, itself left aside; errors.ts is open to all. */
 const order = [
   ['sheet'],
-  ['cautions', 'limits', 'logs', 'product', 'process'],
+  ['cautions', 'checks', 'limits', 'logs', 'product', 'process'],
   ['map'],
   ['equilibrium'],
   ['models'],

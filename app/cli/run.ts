@@ -12,6 +12,7 @@ const commands: Readonly<Record<string, Command>> = {
   state: async (args) => (await import('./state.ts')).stateCommand(args),
   boundary: async (args) => (await import('./boundary.ts')).boundaryCommand(args),
   figure: async (args) => (await import('./figure.ts')).figureCommand(args),
+  about: async (args) => (await import('./about.ts')).aboutCommand(args),
   substances: substancesCommand,
   help: helpCommand,
 };

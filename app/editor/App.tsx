@@ -4,6 +4,7 @@ import { duplicated, removed } from '../store/pathEdits.ts';
 import { openFile } from './actions.ts';
 import { Bench } from './Bench.tsx';
 import { useApp, useAppStore, useWords } from './context.ts';
+import { MapSummary } from './MapSummary.tsx';
 import { Messages } from './Messages.tsx';
 import { ReadingLine } from './ReadingLine.tsx';
 import { RunTable } from './RunTable.tsx';
@@ -56,7 +57,7 @@ function usePageHands(): void {
 
 export function App({ shelf }: { readonly shelf: Shelf }) {
   const open = useApp((s) => s.sheet !== null);
-  const busy = useApp((s) => s.evaluating || s.resultsOf !== s.sheet);
+  const busy = useApp((s) => s.evaluating);
   usePageHands();
   if (!open)
     return (
@@ -71,6 +72,7 @@ export function App({ shelf }: { readonly shelf: Shelf }) {
       <Strip />
       <main>
         <Bench />
+        <MapSummary />
         <ReadingLine />
         <RunTable />
       </main>

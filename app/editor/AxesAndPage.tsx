@@ -129,8 +129,8 @@ export function AxesAndPage() {
       case 'p.scale': {
         const scale = text as View['pressure']['scale'];
         change('pressure scale', (v) => {
-          // A range from zero cannot be logarithmic; the run tells a new one.
-          const range = scale === 'logarithmic' && map.p.range[0] <= 0 ? null : v.pressure.range;
+          // What suits a logarithmic axis leaves a linear one empty, and the other way round.
+          const range = scale === v.pressure.scale ? v.pressure.range : null;
           const kind = scale === 'logarithmic' ? 'absolute' : v.pressure.kind;
           return { ...v, pressure: { ...v.pressure, scale, range, kind } };
         });

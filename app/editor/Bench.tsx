@@ -1,7 +1,8 @@
 import { select } from 'd3';
-import { useEffect, useLayoutEffect, useMemo, useRef, useState } from 'react';
+import { memo, useEffect, useLayoutEffect, useMemo, useRef, useState } from 'react';
 import { composeFigure, steadyLabels, type Figure, type Steady } from '../figure/figure.ts';
 import { drawScene } from '../figure/draw.ts';
+import { timed } from '../store/times.ts';
 import { useApp, useWords } from './context.ts';
 import { useMapHands } from './mapHands.ts';
 
@@ -13,19 +14,21 @@ function fitted(page: { width: number; height: number }, box: { width: number; h
 }
 
 /** The page on the bench: the figure as it will be exported, and all of it can be taken hold of. */
-export function Bench() {
+export const Bench = memo(function Bench() {
   const words = useWords();
   const results = useApp((s) => s.results);
   const sheet = useApp((s) => s.resultsOf);
   const selected = useApp((s) => s.selected);
-  const hint = useApp((s) => s.hint);
+  const snapped = useApp((s) => s.hint?.boundary ?? null);
   const holding = useApp((s) => s.holding);
   // Labels as they stood when the hand took hold.
   const [steady, setSteady] = useState<Steady | null>(null);
   const figure = useMemo<Figure | null>(
     () =>
       sheet && results
-        ? composeFigure(sheet, results, sheet.views[0]!.id, words, steady ?? undefined)
+        ? timed('compose', () =>
+            composeFigure(sheet, results, sheet.views[0]!.id, words, steady ?? undefined),
+          )
         : null,
     [sheet, results, words, steady],
   );
@@ -49,7 +52,8 @@ export function Bench() {
   }, []);
 
   useLayoutEffect(() => {
-    if (figure && svgRef.current) drawScene(svgRef.current, figure.scene, { interactive: true });
+    const svg = svgRef.current;
+    if (svg && figure) timed('draw', () => drawScene(svg, figure.scene, { interactive: true }));
   }, [figure]);
 
   useLayoutEffect(() => {
@@ -61,9 +65,9 @@ export function Bench() {
         return selected !== null && this.dataset.of === selected;
       })
       .classed('snapped', function () {
-        return hint !== null && hint.boundary !== null && this.dataset.of === hint.boundary;
+        return snapped !== null && this.dataset.of === snapped;
       });
-  }, [figure, selected, hint]);
+  }, [figure, selected, snapped]);
 
   const hands = useMapHands(svgRef, figure);
   const size = figure ? fitted(figure.scene, box) : null;
@@ -87,4 +91,4 @@ export function Bench() {
       )}
     </div>
   );
-}
+});

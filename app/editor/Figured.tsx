@@ -12,6 +12,13 @@ function Figure({ slot, commit }: { readonly slot: Slot; readonly commit: Commit
   const [draft, setDraft] = useState<string | null>(null);
   const [trouble, setTrouble] = useState<string | null>(null);
   const troubleId = useId();
+  // A figure that changed by undo or drag starts without an old draft, and keeps the focus.
+  const [of, setOf] = useState(slot.text);
+  if (of !== slot.text) {
+    setOf(slot.text);
+    setDraft(null);
+    setTrouble(null);
+  }
   if (slot.choices) {
     return (
       <select
@@ -89,8 +96,7 @@ export function Figured({
         typeof piece === 'string' ? (
           <span key={i}>{piece}</span>
         ) : (
-          // A figure that changed by undo or drag starts without an old draft.
-          <Figure key={`${piece.field}:${piece.text}`} slot={piece} commit={commit} />
+          <Figure key={piece.field} slot={piece} commit={commit} />
         ),
       )}
     </>

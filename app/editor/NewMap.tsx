@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useRef, useState } from 'react';
 import { localPressure } from '../../core/sheet/site.ts';
 import { catalogue } from '../../core/substances/catalogue.ts';
 import { parseReading, ReadingError } from '../../core/units/index.ts';
@@ -30,9 +30,10 @@ export function NewMap() {
   const words = useWords();
   const e = words.editor;
   const [start, setStart] = useState({ substance: 'water', where: '0 m', kind: 'gauge' });
+  const section = useRef<HTMLElement>(null);
   const list = catalogue.map(({ id }) => ({ value: id, label: words.substance(id) }));
   return (
-    <section className="new-map">
+    <section className="new-map" ref={section}>
       <h2>{e.newMap}</h2>
       <p>
         <Figured
@@ -51,6 +52,9 @@ export function NewMap() {
         <button
           className="strong"
           onClick={() => {
+            // A refused figure is mended first: the map would stand elsewhere than it says.
+            const refused = section.current?.querySelector<HTMLElement>('[aria-invalid=true]');
+            if (refused) return refused.focus();
             const place = placeOf(words, start.where);
             if ('trouble' in place) return;
             store.getState().openSheet(

@@ -11,6 +11,7 @@ export function OnThisMap() {
   const selected = useApp((s) => s.selected);
   const map = results?.maps[0];
   const view = sheet.views[0]!;
+  const runs = sheet.items.filter(({ kind }) => kind === 'path').map(({ id }) => id);
   const toggle = (id: string): void =>
     store.getState().edit('show or hide', (s) =>
       withView(s, view.id, (v) => ({
@@ -18,14 +19,18 @@ export function OnThisMap() {
         hidden: v.hidden.includes(id) ? v.hidden.filter((x) => x !== id) : [...v.hidden, id],
       })),
     );
-  const row = (id: string, mark: string, name: string, more: string) => (
+  const row = (id: string, mark: string, name: string, more: string, colour = 0) => (
     <li key={id} className={selected === id ? 'selected' : ''}>
       <button
         className="row"
         aria-pressed={selected === id}
         onClick={() => store.getState().select(id)}
       >
-        {mark === 'line' ? <i className="line-mark" aria-hidden /> : <i className="tag">{mark}</i>}
+        {mark === 'line' ? (
+          <i className="line-mark" aria-hidden />
+        ) : (
+          <i className={`tag own-${colour}`}>{mark}</i>
+        )}
         <span>{name}</span>
         <span className="muted">{more}</span>
       </button>
@@ -58,6 +63,7 @@ export function OnThisMap() {
             item.tag,
             item.name ?? (item.kind === 'path' ? words.editor.run : words.editor.state),
             '',
+            item.kind === 'path' ? runs.indexOf(item.id) % 4 : 0,
           ),
         )}
       </ul>

@@ -5,10 +5,12 @@ import {
   absolutePressure,
   format,
   formatDifference,
+  formatReading,
   parseReading,
   pressureAs,
   ReadingError,
   standardPressure,
+  type Reading,
   type UnitId,
 } from '../../core/units/index.ts';
 import type { Medium } from '../../core/equilibrium/medium.ts';
@@ -24,6 +26,8 @@ interface Here {
   readonly pressureUnit: UnitId;
   readonly kind: 'gauge' | 'absolute';
   readonly name: string;
+  /** True without a sheet: nothing says where the reading was taken. */
+  readonly atSeaLevel: boolean;
   readonly errors: (kind: 'gauge' | 'absolute' | 'vacuum') => { T: number; p: number };
 }
 
@@ -44,6 +48,8 @@ const pressureText = (p: number, here: Here, words: Words): string =>
     kind: here.kind,
     decimal: words.decimal,
   });
+
+const spoken = (reading: Reading, words: Words): string => formatReading(reading, words.decimal);
 
 /** What a typed reading means here: absolute pressure and boiling point, or boiling pressure. */
 function answer(text: string, here: Here, words: Words): string | null {
@@ -77,12 +83,14 @@ function answer(text: string, here: Here, words: Words): string | null {
       kind === 'absolute'
         ? format(pressureAs('gauge', p, here.local), 'kPa', { digits: 4, kind: 'gauge', decimal })
         : format(p, 'kPa', { digits: 4, kind: 'absolute', decimal });
-    if (!met) return `${e.isAbsolute(other)} · ${e.noLine(here.name)}`;
+    // A bare pressure is told with the kind it was taken for.
+    const is = `${spoken(reading, words)} ${e.isAbsolute(other, here.atSeaLevel)}`;
+    if (!met) return `${is} · ${e.noLine(here.name)}`;
     const error = here.errors(kind).p / met.slope;
     const at = temperatureText(met.T, here, error, words);
     const boils =
       met.line === 'saturation' ? e.boilsAt(here.name, at) : e.sublimesAt(here.name, at);
-    return `${e.isAbsolute(other)} · ${boils}`;
+    return `${is} · ${boils}`;
   } catch (error) {
     if (error instanceof ReadingError) return words.reading(error.issue);
     throw error;
@@ -135,6 +143,7 @@ export function ReadingLine() {
     pressureUnit: (view?.second?.unit ?? view?.pressure.unit ?? 'bar') as UnitId,
     kind: view?.second?.kind ?? view?.pressure.kind ?? sheet?.pressureKind ?? 'gauge',
     name: words.substance(medium.substance.id),
+    atSeaLevel: sheet === null,
     errors: (kind) => siteErrors(site, kind),
   };
   return (

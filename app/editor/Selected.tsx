@@ -6,13 +6,15 @@ import { duplicated, partsOf, removed } from '../store/pathEdits.ts';
 import type { Words } from '../words/en.ts';
 import { useApp, useAppStore, useWords } from './context.ts';
 import { Figured } from './Figured.tsx';
+import { heatText } from './logText.ts';
 import { stateFacts } from './stateFacts.ts';
+import { useMedium } from './useMedium.ts';
 
 /** What a step costs and meets, in rows. */
 function stepFacts(step: StepResult, words: Words): readonly (readonly [string, string])[] {
   const e = words.editor;
   const { decimal } = words;
-  const energy = (value: number): string => format(value, 'kJ/kg', { digits: 4, decimal });
+  const energy = (value: number): string => heatText(value, decimal);
   return [
     ...step.encounters.map((x): [string, string] => [
       e.meets,
@@ -72,6 +74,7 @@ export function Selected() {
   const sheet = useApp((s) => s.sheet)!;
   const results = useApp((s) => s.results);
   const selected = useApp((s) => s.selected);
+  const ready = useMedium(sheet.views[0]!.substance ?? sheet.substances[0]!);
   if (!results || selected === null) return null;
   const boundary = results.maps[0]?.boundaries.find(({ id }) => id === selected);
   if (boundary)
@@ -98,7 +101,7 @@ export function Selected() {
   if (!state && !step) return null;
   const local = airAt(sheet, results, state?.site);
   const facts = [
-    ...(state ? stateFacts(state, sheet.views[0]!, local, words) : []),
+    ...(state ? stateFacts(state, sheet.views[0]!, local, words, ready) : []),
     ...(step ? stepFacts(step, words) : []),
   ];
   const removable = removed(sheet, selected) !== sheet;

@@ -29,7 +29,7 @@ function Demo({ name }: { readonly name: string }) {
       if (!svg.current) return;
       const { scene } = composeFigure(opened.sheet, results, opened.sheet.views[0]!.id, words);
       drawScene(svg.current, scene, { prefix: `demo-${name}` });
-    })();
+    })().catch(() => undefined); // Without its file a demo stays a button that cannot be pressed.
     return () => {
       wanted = false;
     };
@@ -85,7 +85,10 @@ export function StartScreen({ shelf }: { readonly shelf: Shelf }) {
                       saved: Date.now(),
                       by: 'copy',
                     };
-                    void shelf.put(copy).then(() => setKept([copy, ...kept]));
+                    shelf.put(copy).then(
+                      () => setKept([copy, ...kept]),
+                      () => store.getState().tell('trouble', e.copyNotKept),
+                    );
                   }}
                 >
                   {e.copy}

@@ -31,7 +31,10 @@ export async function openFile(store: AppStore, words: Words, file: File): Promi
     store.getState().tell('trouble', words.editor.badFile(file.name, words.editor.tooLarge));
     return;
   }
-  openFromText(store, words, file.name, await file.text());
+  const text = await file.text().catch(() => null);
+  if (text === null)
+    store.getState().tell('trouble', words.editor.badFile(file.name, words.editor.notRead));
+  else openFromText(store, words, file.name, text);
 }
 
 /** The sheet with what made it, as it is saved and exported. */
@@ -54,7 +57,12 @@ export async function exportSvg(store: AppStore, words: Words): Promise<void> {
   const { sheet } = store.getState();
   if (!sheet) return;
   // What is exported is evaluated from the sheet as it stands, not from what is on screen.
-  const results = await evaluateSheet(sheet);
+  const results = await evaluateSheet(sheet).catch((error: unknown) => {
+    const why = error instanceof Error ? error.message : String(error);
+    store.getState().tell('trouble', words.editor.failed(why));
+    return null;
+  });
+  if (!results) return;
   const { scene } = composeFigure(sheet, results, sheet.views[0]!.id, words);
   const svg = await sceneToSvg(scene, { sheet: signed(sheet, results.formulations) });
   const name = fileName(sheet.title, 'svg');

@@ -1,5 +1,5 @@
 /** Demo sheets in public/demos, in the order shown. */
-export const demos = ['retort', 'carbon-dioxide', 'jam-pan', 'ices'] as const;
+export const demos = ['retort', 'carbon-dioxide', 'jam-pan', 'ammonia', 'ices'] as const;
 
 /** The text of a demo sheet, from this page's own folder. */
 export async function demoText(name: string): Promise<string> {

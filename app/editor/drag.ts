@@ -199,8 +199,10 @@ function heldStep(path: PathItem, step: Step): Held {
     const env = { m: medium(substance), local, pressureKind: sheet.pressureKind };
     const run = runPath(now, env).steps.find((s) => s.step.id === step.id);
     if (!run?.from) return;
-    const snap = at.boundary === null ? null : snapOf(figure, at);
-    const end = kindOf(run.step).drag(run.step, run.from, { T: at.T, p: at.p, snap }, env);
+    // An end on a line keeps to its line; the sentence takes it off.
+    const snap = snapOf(figure, at);
+    const target = { T: at.T, p: at.p, ...(snap === null ? {} : { snap }) };
+    const end = kindOf(run.step).drag(run.step, run.from, target, env);
     if (!end) return;
     const old = run.step.end as { readonly T?: string; readonly p?: string };
     const write = writer(figure, path.site, {

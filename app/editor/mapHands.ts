@@ -66,8 +66,13 @@ function setRanges(
 export function useMapHands(svgRef: RefObject<SVGSVGElement | null>, figure: Figure | null) {
   const store = useAppStore();
   const drag = useRef<Drag | null>(null);
-  // What was selected before a first click let go of it, for a second one to build on.
-  const before = useRef<{ selected: string | null; at: number }>({ selected: null, at: 0 });
+  // What was selected before a first click let go of it, for a second one to build on, and what the
+  // first one left selected: anything else was chosen elsewhere since.
+  const before = useRef<{ selected: string | null; at: number; left: string | null }>({
+    selected: null,
+    at: 0,
+    left: null,
+  });
 
   const pageAt = (event: { clientX: number; clientY: number }): [number, number] => {
     const box = svgRef.current!.getBoundingClientRect();
@@ -103,8 +108,9 @@ export function useMapHands(svgRef: RefObject<SVGSVGElement | null>, figure: Fig
     const target = (event.target as Element).closest<SVGElement>('[data-of]');
     const at = pageAt(event);
     drag.current = dragTarget(figure, target?.dataset.of ?? null, at);
-    if (event.timeStamp - before.current.at > 500)
-      before.current = { selected: store.getState().selected, at: event.timeStamp };
+    const { selected } = store.getState();
+    if (event.timeStamp - before.current.at > 500 || selected !== before.current.left)
+      before.current = { selected, at: event.timeStamp, left: null };
     store.getState().select(drag.current.item);
     store.getState().settle();
     store.getState().hold(true);
@@ -139,6 +145,7 @@ export function useMapHands(svgRef: RefObject<SVGSVGElement | null>, figure: Fig
     event.currentTarget.releasePointerCapture(event.pointerId);
     store.getState().settle();
     if (was.kind === 'map' && !was.moved) store.getState().select(null);
+    before.current.left = store.getState().selected;
   };
   const onKeyDown = (event: KeyboardEvent): void => {
     if (!figure || event.target !== event.currentTarget) return;

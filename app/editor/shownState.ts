@@ -17,9 +17,10 @@ export function shownState(
 ): { readonly T: string; readonly p: string; readonly phase: string; readonly next: string } {
   const { decimal } = words;
   const unit = view.temperature.unit;
-  const T = format(s.T, unit, { ...deserved(s.error.T, { decimals: 1 }), decimal });
+  const T = format(s.T, unit, { decimals: 1, decimal });
   const p = format(pressureAs(s.kind, s.p, local), pressureUnit, {
-    ...deserved(s.error.p, { digits: 4 }),
+    // What is planned is told to a tenth of what the gauge can tell.
+    ...(s.error.p > 0 ? { uncertainty: s.error.p / 10 } : { digits: 4 }),
     kind: s.kind,
     decimal,
   });

@@ -1,14 +1,31 @@
 import type { StateResult } from '../../core/sheet/results.ts';
 import type { View } from '../../core/sheet/schema.ts';
-import { format, formatDifference, pressureAs, type UnitId } from '../../core/units/index.ts';
+import type { Medium } from '../../core/equilibrium/medium.ts';
+import type { Margin } from '../../core/map/margins.ts';
+import { marginError } from '../../core/sheet/marginError.ts';
+import {
+  format,
+  formatDifference,
+  pressureAs,
+  type DigitOptions,
+  type UnitId,
+} from '../../core/units/index.ts';
 import type { Words } from '../words/en.ts';
 
-/** What is true of one state, in rows. */
+/** A boundary so far off in pressure that it says nothing of this state. */
+const isFar = (s: StateResult, margin: Margin): boolean =>
+  margin.direction === 'higher pressure' &&
+  margin.boundary !== null &&
+  margin.distance > 50 * s.p &&
+  margin.distance > 10e6;
+
+/** What is true of one state, in rows; `ready` tells how far off its margins may be. */
 export function stateFacts(
   s: StateResult,
   view: View,
   local: number,
   words: Words,
+  ready: Medium | null,
 ): readonly (readonly [string, string])[] {
   const { decimal } = words;
   const e = words.editor;
@@ -30,24 +47,22 @@ export function stateFacts(
       e.phase,
       s.touches ? words.cannotTell(words.boundaryKind(s.touches)) : parts.join(', '),
     ]);
-    for (const m of s.margins) {
-      if (m.boundary === null) continue;
-      const thermal = m.direction === 'warmer' || m.direction === 'colder';
-      const amount = thermal
-        ? formatDifference(m.distance, view.temperature.unit, {
-            ...deserved(s.error.T, 3),
-            decimal,
-          })
-        : format(m.distance, view.pressure.unit as UnitId, { ...deserved(s.error.p, 3), decimal });
-      const phase = s.state.parts[0]!.phase;
-      const slack = thermal
-        ? s.error.T > 0 &&
-          ` ± ${formatDifference(s.error.T, view.temperature.unit, { digits: 1, decimal })}`
-        : s.error.p > 0 &&
-          ` ± ${format(s.error.p, view.pressure.unit as UnitId, { digits: 1, decimal })}`;
+    for (const margin of s.margins) {
+      if (margin.boundary === null || isFar(s, margin)) continue;
+      const thermal = margin.direction === 'warmer' || margin.direction === 'colder';
+      const slack =
+        ready && (s.error.T > 0 || s.error.p > 0) ? marginError(ready, s, margin, s.error) : null;
+      const show = (value: number, digits: DigitOptions): string =>
+        thermal
+          ? formatDifference(value, view.temperature.unit, { ...digits, decimal })
+          : format(value, view.pressure.unit as UnitId, { ...digits, decimal });
+      const amount =
+        slack === null || slack === 0
+          ? show(margin.distance, { digits: 3 })
+          : `${show(margin.distance, { uncertainty: slack })} ± ${show(slack, { digits: 1 })}`;
       facts.push([
-        words.direction[m.direction],
-        words.margin(m.direction, m.kind, phase, amount + (slack || '')),
+        words.direction[margin.direction],
+        words.margin(margin.direction, margin.kind, s.state.parts[0]!.phase, amount),
       ]);
     }
     const single = s.state.parts.length === 1 ? s.state.parts[0]!.properties : null;
@@ -58,6 +73,3 @@ export function stateFacts(
   }
   return facts;
 }
-
-const deserved = (error: number, digits: number) =>
-  error > 0 ? { uncertainty: error } : { digits };

@@ -1,4 +1,4 @@
-import type { PathResult, StepResult } from '../../core/sheet/results.ts';
+import type { PathState, StepResult } from '../../core/sheet/results.ts';
 import type { Step } from '../../core/process/steps/index.ts';
 import { stepKinds } from '../../core/process/steps/index.ts';
 import {
@@ -18,7 +18,9 @@ export interface StepPlace {
   readonly words: Words;
   readonly tag: string;
   readonly substance: string;
-  readonly path: PathResult | undefined;
+  /** States at the step's start and end, as far as the run gets. */
+  readonly from: PathState | undefined;
+  readonly to: PathState | undefined;
   readonly result: StepResult | undefined;
   readonly pressureKind: 'gauge' | 'absolute';
   readonly local: number;
@@ -64,18 +66,19 @@ const endsOf: Readonly<Record<Step['kind'], readonly string[]>> = {
     'solidFraction',
   ],
   ramp: ['T p', 'T saturation', 'p saturation'],
-  follow: ['T', 'p'],
-  hold: ['none', 'vapourFraction', 'solidFraction'],
+  follow: ['T', 'p', 'T vapourFraction', 'p vapourFraction', 'T heat', 'p heat', 'T solidFraction'],
+  hold: ['none', 'heat', 'vapourFraction', 'solidFraction'],
 };
 
 function endWord(step: Step): string {
   const end: End = step.end;
   const keys = Object.keys(end).filter((key) => end[key] !== undefined && key !== 'boundary');
   const boundary = end.boundary;
-  if (step.kind === 'follow') return end.T === undefined ? 'p' : 'T';
   if (boundary !== undefined) return keys.length > 0 ? `${keys[0]} ${boundary}` : boundary;
   if (keys.length === 0) return 'none';
-  return keys.includes('T') && keys.includes('p') ? 'T p' : keys[0]!;
+  return ['T', 'p', 'vapourFraction', 'solidFraction', 'heat']
+    .filter((key) => keys.includes(key))
+    .join(' ');
 }
 
 const canonicalText = (text: string, quantity: Quantity, place: StepPlace): string =>
@@ -90,10 +93,7 @@ const canonicalText = (text: string, quantity: Quantity, place: StepPlace): stri
 
 /** A step's sentence with its fields. */
 export function stepSentence(step: Step, place: StepPlace): Sentence {
-  const { words, tag, result, path } = place;
-  const states = path?.states ?? [];
-  const at = states.findIndex((s) => s.step === step.id);
-  const [from, to] = at > 0 ? [states[at - 1], states[at]] : [undefined, undefined];
+  const { words, tag, result, from, to } = place;
   const does = {
     T: from && to ? Math.sign(+(to.T - from.T).toFixed(6)) : 0,
     p: from && to ? Math.sign(+(to.p - from.p).toPrecision(9)) : 0,
@@ -169,8 +169,7 @@ function timeText(step: Step, words: Words): string {
 
 /** A step of another kind, or with another sort of end, that ends where this one does. */
 function reshaped(step: Step, kind: Step['kind'], word: string, place: StepPlace): Step {
-  const states = place.path?.states ?? [];
-  const at = states.find((s) => s.step === step.id) ?? states.at(-1);
+  const at = place.to ?? place.from;
   const old: End = step.end;
   const T = old.T ?? temperatureReading(at?.T ?? 373.15, place.temperatureUnit, 0.1).text;
   const p =
@@ -188,6 +187,12 @@ function reshaped(step: Step, kind: Step['kind'], word: string, place: StepPlace
     'p saturation': { p, boundary: 'saturation' },
     vapourFraction: { vapourFraction: old.vapourFraction ?? '50 %' },
     solidFraction: { solidFraction: old.solidFraction ?? '50 %' },
+    'T vapourFraction': { T, vapourFraction: old.vapourFraction ?? '10 %' },
+    'p vapourFraction': { p, vapourFraction: old.vapourFraction ?? '10 %' },
+    'T solidFraction': { T, solidFraction: old.solidFraction ?? '50 %' },
+    'T heat': { T, heat: old.heat ?? '0 kJ/kg' },
+    'p heat': { p, heat: old.heat ?? '0 kJ/kg' },
+    heat: { heat: old.heat ?? '0 kJ/kg' },
     none: {},
   };
   const { id, time, rate, vapour } = step;

@@ -1,4 +1,5 @@
 import { select } from 'd3';
+import { shared } from '../shared.ts';
 import {
   layers,
   mmPerPoint,
@@ -214,22 +215,42 @@ function drawClips(root: Element, clipped: readonly SceneLayer[], prefix: string
     });
 }
 
+/** What an `<svg>` shows, and how it was drawn. */
+interface Drawn {
+  readonly scene: Scene;
+  readonly interactive: boolean;
+  readonly prefix: string;
+  /** The layer or shape that an element stands for. */
+  readonly of: WeakMap<Element, SceneLayer | Shape>;
+}
+const known = new WeakMap<Element, Drawn>();
+
 /**
  * Draws a scene into an `<svg>` element: the one place where shapes become elements.
  *
  * Elements are kept by the ids of layers and shapes, so that drawing another scene updates in place
- * and leaves the document that drawing it afresh would. What the element held beforehand from
+ * and leaves the document that drawing it afresh would; layers and shapes that equal what the
+ * element shows already are not touched. What the element held beforehand from
  * elsewhere is removed. Presentation attributes only; coordinates in mm with three decimals.
  */
 export function drawScene(
   root: SVGSVGElement | Element,
-  scene: Scene,
+  wanted: Scene,
   options: DrawOptions = {},
 ): void {
   const { interactive = false, prefix = 'figure' } = options;
-  const svg = select<Element, Scene | undefined>(root);
-  if (svg.datum() === undefined) root.replaceChildren();
-  svg.datum(scene);
+  const svg = select(root);
+  const last = known.get(root);
+  if (!last) root.replaceChildren();
+  const isSame = last?.interactive === interactive && last.prefix === prefix;
+  const scene = isSame ? shared(last.scene, wanted) : wanted;
+  const of = isSame ? last.of : new WeakMap<Element, SceneLayer | Shape>();
+  known.set(root, { scene, interactive, prefix, of });
+  const isNew = (element: Element, thing: SceneLayer | Shape): boolean => {
+    if (of.get(element) === thing) return false;
+    of.set(element, thing);
+    return true;
+  };
   const [width, height] = [mm(scene.width), mm(scene.height)];
   const head: readonly Head[] = [
     { tag: 'title', id: `${prefix}-title`, words: scene.title },
@@ -258,6 +279,9 @@ export function drawScene(
     .selectChildren<Element, SceneLayer>('g')
     .data(drawn, (layer) => layer.id)
     .join((enter) => enter.append(() => svgElement(root, 'g')))
+    .filter(function (layer) {
+      return isNew(this, layer);
+    })
     .each(function (layer) {
       attributes(this, {
         'clip-path': layer.clip ? `url(#${prefix}-clip-${layer.id})` : null,
@@ -268,6 +292,6 @@ export function drawScene(
     .data((layer) => layer.shapes, shapeKey)
     .join((enter) => enter.append((shape) => svgElement(root, tags[shape.kind])))
     .each(function (shape) {
-      setShape(this, shape, interactive);
+      if (isNew(this, shape)) setShape(this, shape, interactive);
     });
 }

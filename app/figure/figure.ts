@@ -1,10 +1,12 @@
 import { scale, temperaturePressurePlane } from '../../core/map/plane.ts';
 import type { Results } from '../../core/sheet/results.ts';
 import type { Sheet } from '../../core/sheet/schema.ts';
+import { shared } from '../shared.ts';
 import type { Words } from '../words/en.ts';
 import { printColours } from './colours.ts';
-import { layout, type PlacedBox } from './layout/layout.ts';
+import { layout, unplacedOf, type PlacedBox } from './layout/layout.ts';
 import { anchorOf } from './layout/moved.ts';
+import type { Obstacles } from './layout/obstacles.ts';
 import type { LabelRequest } from './layout/request.ts';
 import type { Mark, MarkView } from './mark.ts';
 import { axes, grid } from './marks/axes.ts';
@@ -21,24 +23,49 @@ import {
   layers,
   type LayerId,
   type Point,
+  type Rect,
   type Scene,
   type SceneLayer,
   type Shape,
 } from './scene/scene.ts';
 
-/** What a mark makes of a view, its kind of data forgotten. */
-const applied =
-  <D>(mark: Mark<D>) =>
-  (view: MarkView) => {
-    const data = mark.data(view);
-    return {
-      layer: mark.layer,
-      clipped: mark.clipped,
-      shapes: data.flatMap((d) => mark.shapes(d, view)),
-      labels: data.flatMap((d) => mark.labels?.(d, view) ?? []),
-      obstacles: data.map((d) => mark.obstacles?.(d, view) ?? {}),
-    };
+/** What a mark makes of one of its data. */
+interface Made {
+  readonly shapes: readonly Shape[];
+  readonly labels: readonly LabelRequest[];
+  readonly obstacles: Obstacles;
+}
+
+/** All of a `StillView`, told by identity. */
+const stillParts = ({ view, map, frame, colours, words }: MarkView): readonly unknown[] => [
+  ...[view.temperature, view.pressure, view.second, view.fields, frame, colours, words],
+  ...[map.view, map.substance, map.T, map.p, map.width, map.height, map.validity],
+  ...[map.boundaries, map.regions, map.points],
+];
+
+/**
+ * What a mark makes of a view, its kind of data forgotten. While the view stands still, data equal to
+ * the last ones give the very same shapes and requests.
+ */
+const applied = <D extends object>(mark: Mark<D>) => {
+  let last: { still: readonly unknown[]; data: readonly D[]; made: WeakMap<D, Made> } | null = null;
+  return (view: MarkView, still: readonly unknown[]) => {
+    const before = last?.still.every((part, i) => part === still[i]) ? last : null;
+    const data = before ? shared(before.data, mark.data(view)) : mark.data(view);
+    const known = before?.made ?? new WeakMap<D, Made>();
+    last = { still, data, made: known };
+    const made = data.map((d): Made => {
+      const ready = known.get(d) ?? {
+        shapes: mark.shapes(d, view),
+        labels: mark.labels?.(d, view) ?? [],
+        obstacles: mark.obstacles?.(d, view) ?? {},
+      };
+      known.set(d, ready);
+      return ready;
+    });
+    return { layer: mark.layer, clipped: mark.clipped, made };
   };
+};
 
 /** Every mark of a figure, one line each; the layer says where it is drawn. */
 const marks = [
@@ -63,19 +90,34 @@ export interface Figure {
   readonly requests: readonly LabelRequest[];
 }
 
-/** Where labels stand from their anchors, to be kept while something is dragged. */
-export type Steady = ReadonlyMap<string, Point>;
+/** Where labels stand from their anchors, null for those without room, to be kept while something is dragged. */
+export type Steady = ReadonlyMap<string, Point | null>;
 
 /** The labels of a figure as they stand now. */
-export function steadyLabels({ boxes, requests, view }: Figure): Steady {
+export function steadyLabels({ boxes, requests, scene, view }: Figure): Steady {
   const asked = new Map(requests.map((request) => [request.id, request]));
-  return new Map(
-    boxes.map(({ id, box }): [string, Point] => {
+  return new Map([
+    ...boxes.map(({ id, box }): [string, Point] => {
       const [x, y] = anchorOf(asked.get(id)!, view.frame);
       return [id, [box.x - x, box.y - y]];
     }),
-  );
+    ...scene.unplaced.map(({ id }): [string, null] => [id, null]),
+  ]);
 }
+
+/** Requests with the places that they were last given. */
+const offsets = new WeakMap<LabelRequest, LabelRequest>();
+
+function withOffset(request: LabelRequest, offset: Point): LabelRequest {
+  const ready = offsets.get(request);
+  if (ready?.offset === offset) return ready;
+  const made = { ...request, offset };
+  offsets.set(request, made);
+  return made;
+}
+
+/** The last frame, so that an equal one is the same object. */
+let lastFrame: Rect | null = null;
 
 /**
  * The figure of one view of a sheet: results become marks, marks shapes and label requests, layout
@@ -92,7 +134,8 @@ export function composeFigure(
   const view = sheet.views.find(({ id }) => id === viewId) ?? sheet.views[0]!;
   const map = results.maps.find((m) => m.view === view.id)!;
   const page = pageOf(view, captionText(view, sheet, results, words));
-  const { frame } = page;
+  const frame = shared(lastFrame, page.frame);
+  lastFrame = frame;
   const plane = temperaturePressurePlane({
     T: scale(map.T.kind, map.T.range),
     p: scale(map.p.kind, map.p.range),
@@ -115,28 +158,38 @@ export function composeFigure(
     words,
   };
 
-  const made = marks.map((mark) => mark(markView));
+  const still = stillParts(markView);
+  const drawings = marks.map((mark) => mark(markView, still));
   const drawn = new Map<LayerId, { shapes: Shape[]; clipped: boolean }>();
   const into = (layer: LayerId, clipped = false) => {
     const known = drawn.get(layer) ?? { shapes: [], clipped };
     drawn.set(layer, known);
     return known.shapes;
   };
-  for (const { layer, clipped, shapes } of made) into(layer, clipped).push(...shapes);
-  const requests = made
+  for (const { layer, clipped, made } of drawings)
+    into(layer, clipped).push(...made.flatMap(({ shapes }) => shapes));
+  const all = drawings.flatMap(({ made }) => made);
+  const requests = all
     .flatMap(({ labels }) => labels)
     .filter(({ id }) => !view.hidden.includes(`label-${id}`))
     .map((request) => {
       const offset = view.labelOffsets[request.id] ?? steady?.get(request.id);
-      return offset ? { ...request, offset } : request;
+      return offset ? withOffset(request, offset) : request;
     });
-  const met = made.flatMap(({ obstacles }) => obstacles);
+  const met = all.map(({ obstacles }) => obstacles);
   const obstacles = {
     polylines: met.flatMap(({ polylines }) => polylines ?? []),
     boxes: met.flatMap(({ boxes }) => boxes ?? []),
     circles: met.flatMap(({ circles }) => circles ?? []),
   };
-  const placed = layout(requests, obstacles, frame);
+  // What had no room when the hand took hold is not searched for anew at every move.
+  const isWaiting = ({ id }: LabelRequest): boolean => steady?.get(id) === null;
+  const placed = layout(
+    requests.filter((request) => !isWaiting(request)),
+    obstacles,
+    frame,
+  );
+  const waiting = requests.filter(isWaiting).map(unplacedOf);
 
   into('paper').push({
     kind: 'rect',
@@ -177,7 +230,7 @@ export function composeFigure(
         results.states.length + results.paths.reduce((n, p) => n + p.states.length, 0),
       ),
       layers: sceneLayers,
-      unplaced: placed.unplaced,
+      unplaced: [...placed.unplaced, ...waiting],
     },
     view: markView,
     boxes: placed.boxes,

@@ -7,7 +7,7 @@ import type { Obstacles } from './layout/obstacles.ts';
 import type { LabelRequest } from './layout/request.ts';
 import type { LayerId, Point, Rect, Shape } from './scene/scene.ts';
 
-/** All that a mark may look at besides its own data. */
+/** All that a mark may gather its data from. */
 export interface MarkView {
   readonly sheet: Sheet;
   readonly view: View;
@@ -22,15 +22,28 @@ export interface MarkView {
   readonly words: Words;
 }
 
+/**
+ * What stands still while something on the map is moved: all that a mark may look at besides its own
+ * data once that is gathered, so that equal data need not be drawn anew.
+ */
+export interface StillView extends Pick<
+  MarkView,
+  'plane' | 'frame' | 'project' | 'colours' | 'words'
+> {
+  readonly view: Pick<View, 'temperature' | 'pressure' | 'second' | 'fields'>;
+  readonly map: Omit<MapResult, 'tracks' | 'outside'>;
+}
+
 /** One kind of thing on the figure: results in, shapes and label requests out. */
-export interface Mark<D> {
+export interface Mark<D extends object> {
   readonly id: string;
   readonly layer: LayerId;
   /** Whether its shapes end at the frame; the same for all marks of a layer. */
   readonly clipped: boolean;
+  /** Plain data, told apart by content. */
   readonly data: (view: MarkView) => readonly D[];
-  readonly shapes: (d: D, view: MarkView) => readonly Shape[];
-  readonly labels?: (d: D, view: MarkView) => readonly LabelRequest[];
+  readonly shapes: (d: D, view: StillView) => readonly Shape[];
+  readonly labels?: (d: D, view: StillView) => readonly LabelRequest[];
   /** What labels keep away from. */
-  readonly obstacles?: (d: D, view: MarkView) => Obstacles;
+  readonly obstacles?: (d: D, view: StillView) => Obstacles;
 }

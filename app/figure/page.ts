@@ -6,7 +6,7 @@ import { format, parseReading } from '../../core/units/index.ts';
 import type { Words } from '../words/en.ts';
 import type { Rect } from './scene/scene.ts';
 import { mmPerPoint } from './scene/scene.ts';
-import { measure } from './type/measure.ts';
+import { measure, room } from './type/measure.ts';
 
 /** Type sizes of the page in points. */
 export const type = { tick: 8, title: 9, label: 8, region: 9.5, caption: 7 } as const;
@@ -44,7 +44,7 @@ export function wrap(text: string, size: number, width: number): readonly string
   return lines;
 }
 
-type About = Pick<Results, 'cautions' | 'sites' | 'formulations'>;
+type About = Pick<Results, 'cautions' | 'sites' | 'formulations' | 'absent'>;
 
 /** What stands under the map: cautions first, then where the lines come from. */
 export interface CaptionText {
@@ -56,7 +56,8 @@ export interface CaptionText {
 export function pageOf(view: View, text: CaptionText): Page {
   const width = parseReading(view.page.width, 'length').value * 1000;
   const height = parseReading(view.page.height, 'length').value * 1000;
-  const inner = width - 2 * captionSide;
+  // Where another typeface stands in, lines run longer than measured.
+  const inner = (width - 2 * captionSide) / room;
   const lines = [
     ...wrap(text.cautions, type.caption, inner).map((t) => ({
       text: t,
@@ -94,7 +95,7 @@ export function cautionText(cautions: readonly Caution[], words: Words): string 
 /** What the caption of a view says, in a language. */
 export function captionText(view: View, sheet: Sheet, about: About, words: Words): CaptionText {
   const substance = view.substance ?? sheet.substances[0]!;
-  const shown = [view.pressure.site, view.second?.site].filter((id) => id !== undefined);
+  const shown = [view.pressure.site, view.second?.site, ...sheet.items.map(({ site }) => site)];
   const used = about.sites.filter(
     ({ id }, i) => (i === 0 && sheet.items.length > 0) || shown.includes(id),
   );
@@ -102,7 +103,12 @@ export function captionText(view: View, sheet: Sheet, about: About, words: Words
     words.site(name, format(local, 'kPa', { digits: 4, kind: 'absolute', decimal: words.decimal })),
   );
   const lines = words.sources(words.substance(substance), about.formulations[substance] ?? []);
-  return { cautions: cautionText(about.cautions, words), sources: [lines, ...sites].join(' ') };
+  const absent = about.absent[substance] ?? [];
+  const lacking = absent.length > 0 ? [words.linesNotPublished(absent)] : [];
+  return {
+    cautions: cautionText(about.cautions, words),
+    sources: [lines, ...lacking, ...sites].join(' '),
+  };
 }
 
 /** The frame sizes that evaluation needs, for a sheet in a language. */

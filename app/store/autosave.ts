@@ -1,3 +1,5 @@
+import type { Sheet } from '../../core/sheet/schema.ts';
+import { shared } from '../shared.ts';
 import type { AppStore } from './index.ts';
 import type { Kept, Shelf } from './shelf.ts';
 
@@ -30,9 +32,10 @@ export interface AutosaveWords {
 
 /**
  * Keeps the open sheet on the shelf `delay` ms after the last edit, and at once when the page is
- * hidden. A full or failing shelf is told once and tried again at every edit; the sheet stays open.
- * A sheet saved by another tab is taken over while this tab has nothing unsaved of its own; otherwise
- * this tab goes on under a key of its own, so neither work is lost. Returns how to stop.
+ * hidden or another sheet takes its place. A full or failing shelf is told once and tried again at
+ * every edit; the sheet stays open. A sheet saved by another tab is taken over while this tab has
+ * nothing unsaved of its own; otherwise this tab goes on under a key of its own, so neither work is
+ * lost. Returns how to stop.
  */
 export function keepSaved(
   store: AppStore,
@@ -44,19 +47,26 @@ export function keepSaved(
 ): () => void {
   let timer: ReturnType<typeof setTimeout> | null = null;
   let broken = false;
-  const pending = (): boolean => timer !== null;
-
-  const save = async (): Promise<void> => {
+  /** The sheet as the shelf has it. */
+  let shelved: Sheet | null = null;
+  const forgetTimer = (): void => {
     if (timer) clearTimeout(timer);
     timer = null;
-    const { sheet, sheetKey } = store.getState();
-    if (!sheet || !sheetKey) return;
-    const kept: Kept = { key: sheetKey, sheet, saved: Date.now(), by: page };
+  };
+  const unsaved = (): boolean => timer !== null || store.getState().sheet !== shelved;
+
+  const save = async (sheet: Sheet | null, key: string | null): Promise<void> => {
+    forgetTimer();
+    if (!sheet || !key) return;
+    const kept: Kept = { key, sheet, saved: Date.now(), by: page };
     try {
       await shelf.put(kept);
-      tabs.say(sheetKey);
+      tabs.say(key);
       if (broken) store.getState().tell('news', words.keptAgain);
       broken = false;
+      // What was edited meanwhile has its own turn.
+      if (store.getState().sheet !== sheet || store.getState().sheetKey !== key) return;
+      shelved = sheet;
       store.getState().setSaved(true);
     } catch {
       if (!broken) store.getState().tell('trouble', words.notKept);
@@ -64,39 +74,59 @@ export function keepSaved(
       store.getState().setSaved(false);
     }
   };
+  const saveNow = (): void => {
+    const { sheet, sheetKey } = store.getState();
+    void save(sheet, sheetKey);
+  };
 
   const stop = store.subscribe((now, before) => {
-    if (!now.sheet || (now.sheet === before.sheet && now.sheetKey === before.sheetKey)) return;
+    if (now.sheet === before.sheet && now.sheetKey === before.sheetKey) return;
+    // A sheet that gives way to another, or to none, has no later turn.
+    const gaveWay = now.sheetKey !== before.sheetKey && now.sheet !== before.sheet;
+    if (gaveWay && timer) void save(before.sheet, before.sheetKey);
+    if (!now.sheet) return;
     now.setSaved(false);
-    if (timer) clearTimeout(timer);
-    timer = setTimeout(() => void save(), delay);
+    forgetTimer();
+    timer = setTimeout(saveNow, delay);
   });
+  const goOnAlone = (key: string): void => {
+    store.getState().rekey(`${key}-${page}`);
+    store.getState().tell('news', words.ownCopy);
+  };
   const stopHearing = tabs.hear((key) => {
-    const { sheetKey } = store.getState();
-    if (key !== sheetKey) return;
-    if (pending()) {
-      store.getState().rekey(`${key}-${page}`);
-      store.getState().tell('news', words.ownCopy);
-      return;
-    }
-    void shelf.take(key).then((kept) => {
-      if (!kept || kept.by === page || store.getState().sheetKey !== key) return;
-      store.getState().edit(words.otherTab, () => kept.sheet);
+    if (key !== store.getState().sheetKey) return;
+    if (unsaved()) return goOnAlone(key);
+    const take = async (): Promise<void> => {
+      const kept = await shelf.take(key);
+      const { sheet, sheetKey, edit, setSaved } = store.getState();
+      if (!kept || kept.by === page || !sheet || sheetKey !== key) return;
+      // Only opened there, not changed.
+      const theirs = shared(sheet, kept.sheet);
+      if (theirs === sheet) return;
+      if (unsaved()) return goOnAlone(key);
+      edit(words.otherTab, () => theirs);
       // What came from the other tab is saved already.
-      if (timer) clearTimeout(timer);
-      timer = null;
-      store.getState().setSaved(true);
-    });
+      forgetTimer();
+      shelved = theirs;
+      setSaved(true);
+    };
+    take().catch(() => undefined);
   });
   const hidden = (): void => {
-    if (pending()) void save();
+    if (timer) saveNow();
   };
   const canHide = typeof document !== 'undefined';
-  if (canHide) document.addEventListener('visibilitychange', hidden);
+  if (canHide) {
+    document.addEventListener('visibilitychange', hidden);
+    window.addEventListener('pagehide', hidden);
+  }
   return () => {
     stop();
     stopHearing();
-    if (canHide) document.removeEventListener('visibilitychange', hidden);
-    if (timer) clearTimeout(timer);
+    if (canHide) {
+      document.removeEventListener('visibilitychange', hidden);
+      window.removeEventListener('pagehide', hidden);
+    }
+    forgetTimer();
   };
 }

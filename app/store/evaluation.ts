@@ -2,6 +2,7 @@ import type { Results } from '../../core/sheet/results.ts';
 import type { Sheet } from '../../core/sheet/schema.ts';
 import { withChanges, type Answer, type Request } from '../worker/messages.ts';
 import type { AppStore } from './index.ts';
+import { timed, took, tookUntilIdle } from './times.ts';
 
 /** What a worker must do; a test passes its own. */
 export interface WorkerLike {
@@ -16,7 +17,8 @@ const mostRestarts = 2;
 
 /**
  * Keeps the store's results up with its sheet, off the main thread: the newest sheet wins, a lost
- * worker is started again, and after two losses the page evaluates by itself. Returns how to stop.
+ * worker is started again, and lost once more after two restarts the page evaluates by itself, as it
+ * does where the worker fails. Returns how to stop.
  */
 export function keepEvaluated(
   store: AppStore,
@@ -33,60 +35,75 @@ export function keepEvaluated(
     store.getState().setEvaluating(false);
     store.getState().tell('trouble', say.failed(message));
   };
+  const inPage = ({ id, sheet }: { id: number; sheet: Sheet }): void => {
+    evaluateHere(sheet).then(
+      (results) => {
+        if (asked?.id !== id) return;
+        if (store.getState().sheet === sheet) store.getState().setResults(sheet, results);
+        store.getState().setEvaluating(false);
+      },
+      (error: unknown) => {
+        if (asked?.id === id) fail(error instanceof Error ? error.message : String(error));
+      },
+    );
+  };
   const begin = (): WorkerLike => {
     const made = startWorker();
     made.onmessage = ({ data }) => {
-      if (!asked || data.id > asked.id) return;
+      if (made !== worker || !asked || data.id > asked.id) return;
       if (!data.ok) {
-        if (data.id === asked.id) fail(data.message);
+        // Whatever the worker lacks (a file it cannot fetch without a net), the page may have.
+        if (data.id === asked.id) inPage(asked);
         return;
       }
       // Changes build on each other, so older answers are merged though not shown.
-      const { results } = store.getState();
-      const merged = withChanges(fresh ? null : results, data.changes);
-      fresh = false;
-      const sheet = sheets.get(data.id)!;
+      took('evaluate', data.ms);
+      tookUntilIdle('page');
+      const merged = timed('merge', () => withChanges(last, data.changes));
+      last = merged;
+      const sheet = sheets.get(data.id);
       for (const id of sheets.keys()) if (id <= data.id) sheets.delete(id);
-      store.getState().setResults(sheet, merged);
+      if (sheet) store.getState().setResults(sheet, merged);
       store.getState().setEvaluating(data.id !== asked.id);
     };
     made.onerror = () => {
+      if (made !== worker) return;
       made.terminate();
-      worker = null;
-      restarts++;
-      store.getState().tell('trouble', say.lostWorker);
+      lost();
       if (asked) ask(asked.sheet);
     };
     return made;
   };
-  let fresh = true;
+  const lost = (): void => {
+    worker = null;
+    restarts++;
+    store.getState().tell('trouble', say.lostWorker);
+  };
+  /** What the worker's next changes build on. */
+  let last: Results | null = null;
+  /** Sheets asked about; of those that gave way to another, answers are merged and not shown. */
   const sheets = new Map<number, Sheet>();
 
   const ask = (sheet: Sheet): void => {
     asked = { id: ++count, sheet };
     store.getState().setEvaluating(true);
-    if (restarts > mostRestarts) {
-      const { id } = asked;
-      evaluateHere(sheet).then(
-        (results) => {
-          if (asked?.id !== id) return;
-          store.getState().setResults(sheet, results);
-          store.getState().setEvaluating(false);
-        },
-        (error: unknown) => fail(error instanceof Error ? error.message : String(error)),
-      );
-      return;
-    }
+    if (restarts > mostRestarts) return inPage(asked);
     if (!worker) {
-      worker = begin();
-      fresh = true;
+      last = null;
       sheets.clear();
+      try {
+        worker = begin();
+      } catch {
+        lost();
+        return ask(sheet);
+      }
     }
     sheets.set(asked.id, sheet);
     worker.postMessage(asked);
   };
 
-  const stop = store.subscribe(({ sheet }, before) => {
+  const stop = store.subscribe(({ sheet, sheetKey }, before) => {
+    if (sheet !== before.sheet && sheetKey !== before.sheetKey) sheets.clear();
     if (sheet && sheet !== before.sheet) ask(sheet);
   });
   const { sheet } = store.getState();

@@ -24,13 +24,22 @@ export interface SheetSlice {
   redo: () => void;
 }
 
+/** What another sheet begins with; results of the one before would stand under its name. */
+const nothingYet = {
+  history: noHistory,
+  selected: null,
+  hint: null,
+  results: null,
+  resultsOf: null,
+} as const;
+
 export const sheetSlice: StateCreator<AppState, [], [], SheetSlice> = (set, get) => ({
   sheet: null,
   sheetKey: null,
   saved: true,
   history: noHistory,
-  openSheet: (sheet, sheetKey) => set({ sheet, sheetKey, history: noHistory, selected: null }),
-  closeSheet: () => set({ sheet: null, sheetKey: null, history: noHistory, selected: null }),
+  openSheet: (sheet, sheetKey) => set({ sheet, sheetKey, ...nothingYet }),
+  closeSheet: () => set({ sheet: null, sheetKey: null, ...nothingYet }),
   rekey: (sheetKey) => set({ sheetKey }),
   setSaved: (saved) => set({ saved }),
   edit: (name, change, key) => {

@@ -1,4 +1,5 @@
 import { createStore, del, get, keys, set, type UseStore } from 'idb-keyval';
+import { readSheet } from '../../core/sheet/read.ts';
 import type { Sheet } from '../../core/sheet/schema.ts';
 
 /** A sheet as this device keeps it. */
@@ -19,18 +20,28 @@ export interface Shelf {
   list: () => Promise<readonly Kept[]>;
 }
 
-/** Sheets on this device, in the browser's own database; nothing leaves it. */
+/** Whether what lies there is a sheet that this version reads. */
+const isReadable = (kept: Kept | undefined): kept is Kept =>
+  kept !== undefined && readSheet(kept.sheet).ok;
+
+/**
+ * Sheets on this device, in the browser's own database; nothing leaves it. What another version left
+ * there and this one cannot read stays there and is not shown.
+ */
 export function deviceShelf(): Shelf {
   let store: UseStore | null = null;
   const db = (): UseStore => (store ??= createStore('simmerline', 'sheets'));
   return {
     put: (kept) => set(kept.key, kept, db()),
-    take: (key) => get<Kept>(key, db()),
+    take: async (key) => {
+      const kept = await get<Kept>(key, db());
+      return isReadable(kept) ? kept : undefined;
+    },
     remove: (key) => del(key, db()),
     list: async () => {
       const all = await keys<string>(db());
       const kept = await Promise.all(all.map((key) => get<Kept>(key, db())));
-      return kept.filter((k): k is Kept => k !== undefined).sort((a, b) => b.saved - a.saved);
+      return kept.filter(isReadable).sort((a, b) => b.saved - a.saved);
     },
   };
 }

@@ -1,4 +1,6 @@
 import type { CautionCode } from '../../core/cautions/caution.ts';
+import type { UnknownReason } from '../../core/errors.ts';
+import type { BlendReason } from '../../core/substances/catalogue.ts';
 import type { BoundaryKind } from '../../core/map/boundary.ts';
 import type { Direction, NoMargin } from '../../core/map/margins.ts';
 import type { PhaseName } from '../../core/equilibrium/phase.ts';
@@ -7,7 +9,7 @@ import type { StepProblem } from '../../core/process/problem.ts';
 import type { HeatAbsent } from '../../core/process/outcome.ts';
 import type { SheetIssue } from '../../core/sheet/read.ts';
 import type { StateProblem } from '../../core/sheet/results.ts';
-import type { ReferenceState } from '../../core/substances/substance.ts';
+import type { AbsenceReason, Hazard, ReferenceState } from '../../core/substances/substance.ts';
 import { format, type Quantity, type ReadingIssue } from '../../core/units/index.ts';
 import type { Step } from '../../core/process/steps/index.ts';
 import type { Sentence, Slot } from './sentence.ts';
@@ -22,7 +24,60 @@ const substances: Readonly<
     liquid: 'liquid carbon dioxide',
     vapour: 'carbon dioxide gas',
   },
+  ammonia: { name: 'ammonia', liquid: 'liquid ammonia', vapour: 'ammonia gas' },
+  'ammonia-1993': {
+    name: 'ammonia (1993 formulation)',
+    liquid: 'liquid ammonia',
+    vapour: 'ammonia gas',
+  },
+  propane: { name: 'propane', liquid: 'liquid propane', vapour: 'propane gas' },
+  isobutane: { name: 'isobutane', liquid: 'liquid isobutane', vapour: 'isobutane gas' },
+  'n-butane': { name: 'n-butane', liquid: 'liquid n-butane', vapour: 'n-butane gas' },
+  r134a: { name: 'R-134a', liquid: 'liquid R-134a', vapour: 'R-134a vapour' },
+  r1234yf: { name: 'R-1234yf', liquid: 'liquid R-1234yf', vapour: 'R-1234yf vapour' },
+  'r1234ze-e': { name: 'R-1234ze(E)', liquid: 'liquid R-1234ze(E)', vapour: 'R-1234ze(E) vapour' },
+  ethanol: { name: 'ethanol', liquid: 'liquid ethanol', vapour: 'ethanol vapour' },
+  nitrogen: { name: 'nitrogen', liquid: 'liquid nitrogen', vapour: 'nitrogen gas' },
+  oxygen: { name: 'oxygen', liquid: 'liquid oxygen', vapour: 'oxygen gas' },
+  argon: { name: 'argon', liquid: 'liquid argon', vapour: 'argon gas' },
+  methane: { name: 'methane', liquid: 'liquid methane', vapour: 'methane gas' },
 };
+
+/** Why a boundary or a phase is not told. */
+const absences = {
+  'not published': 'no equation for it is published',
+} satisfies Record<AbsenceReason, string>;
+const unknowns = {
+  'melting not published': 'no melting line is published that would tell solid from liquid here',
+  'sublimation not published':
+    'no sublimation line is published that would tell solid from vapour here',
+  'beyond the melting line': 'the published melting line ends below this pressure',
+  'no equation for the solid': 'no equation of the solid is published',
+} satisfies Record<UnknownReason, string>;
+
+/** What a substance does to people and plant. */
+const hazards = {
+  scald: 'scalds',
+  pressure: 'stands under pressure when shut in and warmed',
+  asphyxiation: 'suffocates, and is toxic by itself',
+  'displaces air': 'displaces air and suffocates without warning',
+  'cold burn': 'its cold burns skin',
+  cryogenic: 'cryogenic: burns skin, makes steel brittle, bursts what traps its liquid',
+  'dry ice blocks lines': 'turns to solid that blocks lines below its triple pressure',
+  toxic: 'toxic and corrosive',
+  flammable: 'flammable',
+  'mildly flammable': 'mildly flammable',
+  'toxic in fire': 'turns into toxic, corrosive gas in flames and on hot surfaces',
+  oxidiser: 'feeds fire: oil, grease and unsuitable materials burn in it',
+} satisfies Record<Hazard, string>;
+
+/** Why a blend is refused. */
+const blends = {
+  'boils over a range':
+    'is a blend: it boils over a range of temperatures, while its parts leave it unevenly, and is no pure substance',
+  azeotrope:
+    'is a blend: its parts boil together at one pressure only, and it is no pure substance',
+} satisfies Record<BlendReason, string>;
 
 const quantityNames: Readonly<Record<Quantity, string>> = {
   temperature: 'temperature',
@@ -164,7 +219,7 @@ function problemSentence(problem: StateProblem, told: ProblemTold): string {
     case 'onBoundary':
       return `Temperature and pressure lie on the ${told.boundary(problem.boundary)}, where they do not fix the state: give a ${problem.needs}.`;
     case 'unknown':
-      return `The phase is not known: ${problem.reason}.`;
+      return `The phase is not known: ${unknowns[problem.reason]}.`;
     case 'unsolved':
       return 'The equations could not be solved here; move the state a little and tell us what you gave.';
   }
@@ -180,7 +235,8 @@ Columns may be parted by comma, semicolon or tab; beside a semicolon or a tab
 commas may be decimal. One bad line refuses the whole file.`;
 const referenceHelp = `Zero of h, u and s:
   water           u = s = 0 for saturated liquid at the triple point (IAPWS)
-  carbon dioxide  h = s = 0 for the ideal gas at 298.15 K and 101.325 kPa`;
+  carbon dioxide  h = s = 0 for the ideal gas at 298.15 K and 101.325 kPa
+  others          as the command about says; never compare across substances`;
 const exitHelp = `Exit status: 0 done, 2 refused with one line on standard error that says why,
 1 a fault of the program itself.`;
 
@@ -193,6 +249,7 @@ equations of state.
   state <substance> --T … --p …            phase and properties at a point
   boundary <substance> <line> --T … | --p … both sides of a boundary
   figure <sheet.json> <out.svg>            the figure of a sheet
+  about <substance>                        sources, validity, hazards, and the checks it passes
   substances                               what there is
   help [command]                           this, or more about a command
   --version                                the version
@@ -262,6 +319,17 @@ from an SVG that carries it. The file is written whole or not at all.
 
 ${exitHelp}
 `,
+    about: `about <substance> [--checks | --json]
+
+Constants, full citations, ranges, uncertainties and hazards of a substance, and how
+the values that its sources print compare with what is computed here.
+
+  --checks               every value: published, computed, deviation
+  --json                 JSON in SI: the substance's file and every check with its
+                         value, computed value, deviation and tolerance
+
+${exitHelp}
+`,
     substances: `substances
 
 Every substance with its id, formula, CAS number, ISO 817 number and names.
@@ -299,8 +367,8 @@ General help, or help on one command.
     word === undefined
       ? `no boundary is given: ${oneOf(kinds)}.`
       : `${quote(word)} is no boundary: ${oneOf(kinds)}.`,
-  noLine: (substance: string, kind: string, reason: string | null): string =>
-    `no ${kind} line of ${substance} is known${reason === null ? '' : `: ${reason}`}.`,
+  noLine: (substance: string, kind: string, reason: AbsenceReason | null): string =>
+    `no ${kind} line of ${substance} is known${reason === null ? '' : `: ${absences[reason]}`}.`,
   bothSides: (substance: string, kind: string): string =>
     `The command boundary ${substance} ${kind} gives both sides.`,
   barometerKind: 'a barometer shows an absolute pressure.',
@@ -366,8 +434,14 @@ General help, or help on one command.
   equations: (list: readonly string[]): string => `Equations: ${list.join('; ')}.`,
   referenceState: {
     'liquid at the triple point': 'Zero: u = s = 0 for saturated liquid at the triple point.',
+    'liquid at the triple point: h = s = 0':
+      'Zero: h = s = 0 for saturated liquid at the triple point.',
     'ideal gas at 298.15 K and 101.325 kPa':
       'Zero: h = s = 0 for the ideal gas at 298.15 K and 101.325 kPa.',
+    'ideal gas at 298.15 K and 101.325 kPa: 8670 J/mol, 191.5 J/(mol K)':
+      'Zero: h = 8670 J/mol and s = 191.5 J/(mol·K) for the ideal gas at 298.15 K and 101.325 kPa.',
+    'ideal gas at 298.15 K and 101.325 kPa: 8680 J/mol, 205.043 J/(mol K)':
+      'Zero: h = 8680 J/mol and s = 205.043 J/(mol·K) for the ideal gas at 298.15 K and 101.325 kPa.',
     'liquid at 273.15 K: 200 kJ/kg, 1 kJ/(kg K)':
       'Zero: h = 200 kJ/kg and s = 1 kJ/(kg·K) for saturated liquid at 273.15 K.',
     'liquid at the normal boiling point':
@@ -569,6 +643,18 @@ export const en = {
     vacuum: 'Vacuum: vessels implode, liquids boil over; makers’ ratings decide.',
     asphyxiation:
       'Carbon dioxide suffocates and is toxic: ventilation and gas detection by local code.',
+    'displaces air':
+      'Displaces air and suffocates without warning: ventilation and oxygen monitoring by local code.',
+    toxic:
+      'Toxic: gas detection, breathing protection and escape by local code; authorised people only.',
+    flammable:
+      'Flammable: ignition sources, zoning and ventilation by local code; authorised people decide.',
+    'mildly flammable': 'Mildly flammable: charge, ventilation and ignition sources by local code.',
+    'toxic in fire': 'Flames and hot surfaces turn it into toxic, corrosive gas.',
+    oxidiser:
+      'Feeds fire: oil, grease and unsuitable materials burn in it; suppliers’ written procedures decide.',
+    cryogenic:
+      'Cryogenic: burns skin, makes steel brittle, bursts what traps it; suppliers’ written procedures decide.',
     'cold burn': 'Cold burns skin and makes steel brittle.',
     'dry ice blocks lines':
       'Below its triple pressure it turns to solid that blocks lines: never re-pressurise but by the gas supplier’s procedure.',
@@ -603,10 +689,92 @@ export const en = {
   } satisfies Record<Direction, string>,
   site: (name: string, local: string): string => `${name}: local atmosphere ${local}.`,
   noSource: 'beyond the published range',
+  /** Where a field ends because nobody has published the line that would bound it. */
+  notPublished: 'solid: no line is published',
+  linesNotPublished: (boundaries: readonly ('melting' | 'sublimation')[]): string =>
+    `Its ${boundaries.join(' and ')} ${boundaries.length > 1 ? 'lines are' : 'line is'} not published: liquid and vapour end where their equation does.`,
+  /** Why a blend cannot be drawn. */
+  blend: (word: string, reason: BlendReason): string => `${quote(word)} ${blends[reason]}.`,
+
+  /** The card of a substance. */
+  card: {
+    title: (substance: string): string => `About ${substance}`,
+    close: 'Close',
+    identity: 'Identity',
+    names: 'names',
+    formula: 'formula',
+    cas: 'CAS number',
+    refrigerant: 'ISO 817 number',
+    molarMass: 'molar mass',
+    points: 'Fixed points',
+    critical: 'critical point',
+    criticalOfEquation: 'critical point of the equation',
+    triple: (phases: readonly string[]): string => `triple point ${phases.join('–')}`,
+    normal: { boiling: 'normal boiling point', sublimation: 'normal sublimation point' },
+    equations: 'Equations',
+    fluid: 'fluid',
+    printed: 'as printed',
+    validity: 'valid for liquid and vapour',
+    vapour: 'vapour used down to',
+    range: (low: string, high: string): string => `${low} to ${high}`,
+    upTo: (p: string): string => `up to ${p}`,
+    solid: (name: string): string => name,
+    line: (kind: 'melting' | 'sublimation', form: string, alone: boolean): string =>
+      alone ? `${kind} line` : `${kind} line of ${form}`,
+    absent: (kind: 'melting' | 'sublimation'): string => `${kind} line`,
+    absence: absences,
+    saturation: 'first guesses of the boiling line',
+    zero: 'reference state',
+    uncertainty: 'Uncertainty',
+    provenance: { published: 'published', recalled: 'recalled' },
+    hazards: 'Hazards',
+    hazard: hazards,
+    hazardsDefer:
+      'Local codes, suppliers’ data sheets and written procedures, and authorised people decide.',
+    checks: 'Checks',
+    checking: 'Checking…',
+    checkSummary: (passed: number, all: number): string =>
+      passed === all
+        ? `All ${all} values are met within their tolerance.`
+        : `${passed} of ${all} values are met within their tolerance.`,
+    checkGroup: (source: string, provenance: string, passed: number, all: number): string =>
+      `${source} (${provenance}): ${passed === all ? `all ${all}` : `${passed} of ${all}`} met`,
+    state: 'state',
+    quantity: 'quantity',
+    published: 'published',
+    computed: 'computed',
+    deviation: 'deviation',
+    ofTolerance: 'of tolerance',
+    undefined: 'not defined',
+    everyValue: 'Every value',
+    origin: {
+      'published, one text': 'digits from one public transcription',
+      'published, two texts': 'digits agree in two public texts',
+      recalled: 'recalled',
+      'computed elsewhere': 'computed by an independent program',
+      computed: 'computed once; guards against change only',
+    } as Readonly<Record<string, string>>,
+  },
   outsideFrame: (tags: readonly string[]): string =>
     `${tags.join(', ')} ${tags.length > 1 ? 'lie' : 'lies'} outside this map`,
   description: (substance: string, states: number): string =>
     `Pressure–temperature map of ${substance}${states > 0 ? ` with ${states} state${states > 1 ? 's' : ''}` : ''}`,
+
+  /** The map told in words, for those who do not see it. */
+  summary: {
+    title: 'The map in words',
+    axes: (temperature: string, pressure: string): string =>
+      `Temperature from ${temperature}, pressure from ${pressure}.`,
+    span: (low: string, high: string): string => `${low} to ${high}`,
+    place: (T: string, p: string): string => `${T} and ${p}`,
+    lines: 'Lines',
+    line: (name: string, from: string, to: string): string => `${name}, from ${from} to ${to}`,
+    points: 'Points',
+    states: 'States',
+    noStates: 'No states yet.',
+    item: (parts: readonly string[]): string => `${parts.filter(Boolean).join(', ')}.`,
+    outside: 'outside this map',
+  },
 
   /** The workplace round the map. */
   editor: {
@@ -640,7 +808,6 @@ export const en = {
     duplicate: 'Duplicate',
     copy: 'Copy',
     copyOf: (title: string): string => `${title || 'Untitled sheet'}, copy`,
-    fold: (what: string): string => `Fold ${what.toLowerCase()}`,
     close: 'Close',
     dismiss: 'Dismiss',
     state: 'State',
@@ -668,7 +835,8 @@ export const en = {
     readingHint: '1.2 bar(g) or 118 °C',
     underPointer: 'under the pointer',
     here: 'here',
-    isAbsolute: (text: string): string => `is ${text} here`,
+    isAbsolute: (text: string, atSeaLevel: boolean): string =>
+      `is ${text} ${atSeaLevel ? 'at sea level' : 'here'}`,
     boilsAt: (substance: string, text: string): string => `pure ${substance} boils at ${text}`,
     sublimesAt: (substance: string, text: string): string =>
       `pure ${substance} sublimes at ${text}`,
@@ -679,6 +847,7 @@ export const en = {
     openFile: 'Open a sheet or an exported figure',
     badFile: (name: string, reason: string): string => `${name} was not opened: ${reason}`,
     notASheet: 'it holds no Simmerline sheet.',
+    notRead: 'it could not be read.',
     opened: (title: string): string => `Opened “${title}”.`,
     exported: (name: string): string =>
       `Exported ${name}. The sheet travels inside and opens again from it.`,
@@ -702,17 +871,19 @@ export const en = {
     pageSize: 'A page is 40 mm to 2 m on a side.',
     fractionRange: 'A fraction lies between 0 and 100 %.',
     kept: 'kept on this device',
+    copyNotKept: 'This device could not keep the copy: its storage is full or closed.',
     keeping: '…',
     keptSheets: 'Sheets on this device',
     removeSheet: (title: string): string => `Remove ${title || 'untitled sheet'} from this device`,
     tooLarge: 'it is larger than 40 MB.',
     show: 'show',
     hide: 'hide',
-    shown: (name: string): string => `${name} shown`,
     basis: 'Basis',
     source: 'Source',
     cautions: 'Cautions',
     runTable: 'Run table',
+    fold: 'Fold the run table',
+    unfold: 'Show the run table',
     readingLineName: 'Reading line',
     to: 'to',
     lowest: (what: string): string => `lowest ${what.toLowerCase()} on the map`,
@@ -889,17 +1060,38 @@ export const en = {
     saturation: 'the boiling line',
     melting: 'the melting line',
     sublimation: 'the sublimation line',
-    'T saturation': 'the boiling line at',
-    'p saturation': 'the boiling line at ',
+    'T saturation': 'the boiling line at a temperature of',
+    'p saturation': 'the boiling line at a pressure of',
+    'T vapourFraction': 'a temperature, with a share of',
+    'p vapourFraction': 'a pressure, with a share of',
+    'T solidFraction': 'a temperature, with a share of',
+    'p solidFraction': 'a pressure, with a share of',
+    'T heat': 'a temperature, with a heat of',
+    'p heat': 'a pressure, with a heat of',
+    heat: 'a heat of',
     vapourFraction: 'a share of vapour',
     solidFraction: 'a share of solid',
     none: 'as it is',
   },
   /** The start of a path as a sentence. */
-  pathStart: (slots: readonly Slot[]): Sentence =>
+  pathStart: (slots: readonly Slot[], pair: Slot): Sentence =>
     slots.some(({ field }) => field.endsWith('Fraction'))
-      ? ['Start on the line at ', slots[0]!, ' with ', slots[1]!, ' vapour']
-      : ['Start at ', slots[0]!, ' and ', slots[1]!],
+      ? [
+          'Start on the line at ',
+          slots[0]!,
+          ' with ',
+          slots[1]!,
+          slots[1]!.field === 'solidFraction' ? ' solid' : ' vapour',
+          pair,
+        ]
+      : ['Start at ', slots[0]!, ' and ', slots[1]!, pair],
+  /** Pairs of givens that pin a state. */
+  pairs: {
+    'T p': 'temperature and pressure',
+    'T vapourFraction': 'boiling at a temperature',
+    'p vapourFraction': 'boiling at a pressure',
+  },
+  pairOf: (tag: string): string => `what is given of ${tag}`,
   /** A step as a sentence: what it does, to where, how long, and what becomes of the steam. */
   stepSentence: (parts: {
     readonly kind: Slot;
@@ -920,7 +1112,11 @@ export const en = {
       slot.field === 'end.solidFraction' ? ' solid' : '',
     ]),
     ...(parts.end?.quiet ? [parts.end] : []),
-    parts.kind.text === 'hold' && parts.values.length === 0 ? ' for ' : ' in ',
+    parts.time.text.includes('/')
+      ? ' at '
+      : parts.kind.text === 'hold' && parts.values.length === 0
+        ? ' for '
+        : ' in ',
     parts.time,
     ...(parts.vapour ? [`, ${parts.vapourName} `, parts.vapour] : []),
   ],
@@ -955,10 +1151,10 @@ export const en = {
   massLeft: (text: string): string => `${text} left`,
 
   /** A state as a sentence with figures in it. */
-  stateSentence: (slots: readonly Slot[]): Sentence =>
+  stateSentence: (slots: readonly Slot[], pair: Slot): Sentence =>
     slots.some(({ field }) => field === 'vapourFraction')
-      ? ['On the boiling line at ', slots[0]!, ', ', slots[1]!, ' vapour']
-      : ['At ', slots[0]!, ' and ', slots[1]!],
+      ? ['On the boiling line at ', slots[0]!, ', ', slots[1]!, ' vapour', pair]
+      : ['At ', slots[0]!, ' and ', slots[1]!, pair],
 
   quantity: quantityNames,
   reading: readingSentence,

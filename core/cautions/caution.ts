@@ -14,6 +14,13 @@ export type CautionCode =
   | 'scald'
   | 'vacuum'
   | 'asphyxiation'
+  | 'displaces air'
+  | 'toxic'
+  | 'flammable'
+  | 'mildly flammable'
+  | 'toxic in fire'
+  | 'oxidiser'
+  | 'cryogenic'
   | 'cold burn'
   | 'dry ice blocks lines'
   | 'high pressure';

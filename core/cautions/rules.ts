@@ -1,3 +1,4 @@
+import type { Hazard } from '../substances/substance.ts';
 import type { Caution, CautionCode, Judged } from './caution.ts';
 
 type Rule = readonly [
@@ -5,6 +6,14 @@ type Rule = readonly [
   applies: (j: Judged) => boolean,
   number: (j: Judged) => readonly [name: string, value: number],
   worst: 'high' | 'low',
+];
+
+/** A hazard that needs no threshold: it stands wherever the substance does. */
+const always = (code: CautionCode & Hazard): Rule => [
+  code,
+  (j) => j.hazards.includes(code),
+  (j) => ['T', j.T],
+  'low',
 ];
 
 /**
@@ -22,7 +31,15 @@ const rules: readonly Rule[] = [
   ['high pressure', (j) => j.p >= 100e6, (j) => ['p', j.p], 'high'],
   ['scald', (j) => j.hazards.includes('scald') && j.T > 323.15, (j) => ['T', j.T], 'high'],
   ['vacuum', (j) => j.p < j.local - 10e3, (j) => ['p', j.p], 'low'],
-  ['asphyxiation', (j) => j.hazards.includes('asphyxiation'), (j) => ['T', j.T], 'low'],
+  always('asphyxiation'),
+  always('displaces air'),
+  always('toxic'),
+  always('flammable'),
+  always('mildly flammable'),
+  always('toxic in fire'),
+  always('oxidiser'),
+  // What is named cryogenic is colder than −90 °C where it is liquid under the pressures of a plant.
+  ['cryogenic', (j) => j.hazards.includes('cryogenic') && j.T < 183.15, (j) => ['T', j.T], 'low'],
   ['cold burn', (j) => j.hazards.includes('cold burn') && j.T < 273.15, (j) => ['T', j.T], 'low'],
   [
     'dry ice blocks lines',

@@ -26,7 +26,9 @@ export function densityAt(
   const RT = fluid.R * T;
   let low = 0;
   let high = Infinity;
-  let rho = start ?? NaN;
+  // No liquid is so dense; beyond, some equations turn over.
+  const densest = 1.8 * m.triple.rhoL;
+  let rho = start !== undefined && !(start > densest) ? start : NaN;
   if (T < critical.T) {
     const near = T > 0.95 * critical.T;
     // So close below the critical temperature the loop of the isotherm is lost in rounding, and the
@@ -40,9 +42,14 @@ export function densityAt(
       low *= 1 - slack;
       if (!(rho > low)) rho = low * 1.03;
     } else {
+      // Below the triple point the auxiliary equation is stretched past its range, and vapour is thin.
+      const aside = T < m.triple.T && p <= m.triple.p ? 2 * (p / RT) : 0;
       high = near
         ? saturationAt(m, T).rhoV * (1 + slack)
-        : Math.min(auxiliary(substance.saturation.vapourDensity, T) * 1.1, critical.rho);
+        : Math.min(
+            Math.max(auxiliary(substance.saturation.vapourDensity, T) * 1.1, aside),
+            critical.rho,
+          );
       if (!(rho > 0 && rho < high)) rho = Math.min(p / RT, 0.98 * high);
     }
   } else if (!(rho > 0)) {

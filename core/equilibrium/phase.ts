@@ -42,7 +42,7 @@ export function meltingLineAt(m: Medium, p: number): MeltingLine | null {
  * Below this temperature the substance may be solid at a pressure that no melting line reaches: a
  * melting curve rises more steeply than p ∝ T, which bounds it beyond its last published point.
  */
-function maybeSolidBelow(m: Medium, p: number): number {
+export function maybeSolidBelow(m: Medium, p: number): number {
   return m.substance.melting.reduce((T, line) => {
     const [, high] = meltingPressureRange(m, line);
     return Math.max(T, p > high ? line.range.Tmax * (p / high) : T);
@@ -72,13 +72,13 @@ function onLine(
   T: number,
   p: number,
   atT: number,
-  Tmax: number,
+  [Tmin, Tmax]: readonly [number, number],
   line: (T: number) => number,
 ): boolean {
   if (close(p, atT)) return true;
   // Far from the line the two solutions below cannot enclose p.
   if (Math.abs(p / atT - 1) > 1e-6) return false;
-  const colder = line(T * (1 - onBoundary));
+  const colder = line(Math.max(Tmin, T * (1 - onBoundary)));
   const warmer = line(Math.min(Tmax, T * (1 + onBoundary)));
   return p > colder && p < warmer;
 }
@@ -105,9 +105,10 @@ export function stablePhase(m: Medium, T: number, p: number): PhaseState {
   if (p < triple.p) {
     if (T < triple.T) {
       const line = sublimationLineAt(m, T);
-      if (!line) throw new Unknown('the phase', 'no sublimation line is published here');
+      if (!line) throw new Unknown('phase', 'sublimation not published');
       const at = sublimationPoint(m, line, T);
-      if (onLine(T, p, at.p, line.range.Tmax, (t) => sublimationPoint(m, line, t).p))
+      const { Tmin, Tmax } = line.range;
+      if (onLine(T, p, at.p, [Tmin, Tmax], (t) => sublimationPoint(m, line, t).p))
         throw new Undetermined(line.id, T, p, 'solid fraction');
       if (p > at.p)
         return { phase: 'solid', solid: line.solid, T, p, rho: solidDensity(m, line.solid, T, p) };
@@ -133,7 +134,10 @@ export function stablePhase(m: Medium, T: number, p: number): PhaseState {
           };
       }
     } else if (T < maybeSolidBelow(m, p)) {
-      throw new Unknown('the phase', 'no melting line is published here');
+      throw new Unknown(
+        'phase',
+        substance.melting.length > 0 ? 'beyond the melting line' : 'melting not published',
+      );
     }
   }
   const phase = fluidName(m, T, p);
@@ -141,7 +145,7 @@ export function stablePhase(m: Medium, T: number, p: number): PhaseState {
     const guess = auxiliary(substance.saturation.pressure, T);
     if (
       Math.abs(p / guess - 1) < 0.2 &&
-      onLine(T, p, saturationAt(m, T).p, critical.T, (t) => saturationAt(m, t).p)
+      onLine(T, p, saturationAt(m, T).p, [triple.T, critical.T], (t) => saturationAt(m, t).p)
     )
       throw new Undetermined('saturation', T, p, 'vapour fraction');
   }

@@ -52,15 +52,52 @@ export function saturationAt(m: Medium, T: number, start?: Saturation): Saturati
     return { T, p, rhoL: critical.rho, rhoV: critical.rho };
   }
 
+  const dc = critical.rho / fluid.rhor;
+  const l = start?.rhoL ?? auxiliary(m.substance.saturation.liquidDensity, T);
+  const v = start?.rhoV ?? auxiliary(m.substance.saturation.vapourDensity, T);
+  const apart = (rho: number): number => rho / critical.rho - 1;
+  return (
+    // Where the equation's critical point is not the published one, an auxiliary equation ends early.
+    (apart(l) > 1e-9 && apart(v) < -1e-9 && v > 0
+      ? newton(m, T, l / fluid.rhor, v / fluid.rhor)
+      : null) ??
+    (T > 0.98 * critical.T
+      ? newton(m, T, dc * (1 + halfGap(m, T)), dc * (1 - halfGap(m, T)))
+      : null) ??
+    saturationByBracket(m, T)
+  );
+}
+
+/**
+ * Half the gap between the saturated densities next to the critical point, relative to the critical
+ * density: the isotherm's slope is taken as a parabola over density, whose zeros are the spinodals;
+ * √3 times as far out pressure and Gibbs energy agree on both sides.
+ */
+function halfGap(m: Medium, T: number): number {
+  const { fluid, critical } = m;
+  const slope = (rho: number): number => {
+    fluid.residual(T, rho);
+    return 1 + 2 * fluid.aRd + fluid.aRdd;
+  };
+  let gap = 2 * Math.sqrt(1 - T / critical.T);
+  const middle = slope(critical.rho);
+  for (let i = 0; i < 8; i++) {
+    const bend =
+      (slope(critical.rho * (1 + gap)) + slope(critical.rho * (1 - gap)) - 2 * middle) /
+      (2 * gap * gap);
+    const next = Math.sqrt(Math.max(0, (-3 * middle) / bend));
+    if (!(next > 0)) break;
+    gap = Math.min(0.6, next);
+  }
+  return gap;
+}
+
+/** Newton in both reduced densities from a start; null where it fails. */
+function newton(m: Medium, T: number, l: number, v: number): Saturation | null {
+  const { critical, fluid } = m;
   const rhor = fluid.rhor;
   const dc = critical.rho / rhor;
   const x = 1 - T / critical.T;
-  let l = (start?.rhoL ?? auxiliary(m.substance.saturation.liquidDensity, T)) / rhor;
-  let v = (start?.rhoV ?? auxiliary(m.substance.saturation.vapourDensity, T)) / rhor;
-  if (!(l > dc * (1 + 1e-9)) || !(v < dc * (1 - 1e-9)) || !(v > 0)) {
-    l = dc * (1 + 1.6 * Math.sqrt(x));
-    v = dc * Math.max(0.05, 1 - 1.6 * Math.sqrt(x));
-  }
   const tolerance = 1e-12 + 1e-14 / x;
   let last = Infinity;
   for (let i = 0; i < 60; i++) {
@@ -83,9 +120,7 @@ export function saturationAt(m: Medium, T: number, start?: Saturation): Saturati
       if (!(a > 0 && b > 0)) break;
       v += dv;
       l += dl;
-      const solved = settle(m, T, l, v);
-      if (solved) return solved;
-      break;
+      return settle(m, T, l, v);
     }
     last = size;
     while (!(l + dl > dc) || !(v + dv < dc) || !(v + dv > 0.2 * v) || l + dl > 1.5 * l) {
@@ -97,7 +132,7 @@ export function saturationAt(m: Medium, T: number, start?: Saturation): Saturati
     l += dl;
     v += dv;
   }
-  return saturationByBracket(m, T);
+  return null;
 }
 
 function settle(m: Medium, T: number, l: number, v: number): Saturation | null {
@@ -131,9 +166,15 @@ export function saturationByBracket(m: Medium, T: number): Saturation {
   const spinodal = (from: number, factor: number): number => {
     let good = from;
     let bad = from;
+    let last = Infinity;
     for (let i = 0; i < 4000; i++) {
       bad = good * factor;
-      if (slope(bad) <= 0) break;
+      const next = slope(bad);
+      if (next <= 0) break;
+      // Between the branches some equations swing far up again: the branch ends where, once soft, it
+      // stiffens.
+      if (next > last && last < 0.9) return good;
+      last = next;
       good = bad;
       if ((factor > 1 && good > critical.rho) || (factor < 1 && good < critical.rho)) break;
     }
@@ -168,7 +209,10 @@ export function saturationByBracket(m: Medium, T: number): Saturation {
     (log, out) => {
       const target = Math.exp(log);
       rhoV = onBranch(target, 0, topV);
-      rhoL = onBranch(target, bottomL, bottomL * 3);
+      // Far beyond the densest liquid some equations turn over: the bracket ends once p is passed.
+      let dense = bottomL;
+      for (let i = 0; i < 100 && p(dense) <= target; i++) dense *= 1.02;
+      rhoL = onBranch(target, bottomL, dense);
       out.value = K(rhoL) - K(rhoV);
       out.slope = (target / RT) * (1 / rhoL - 1 / rhoV);
     },
@@ -240,7 +284,8 @@ export function saturationAtPressure(m: Medium, p: number, start?: Saturation): 
   return { ...solved, p };
 }
 
-function guessTemperature(m: Medium, log: number): number {
+/** Boiling temperature (K) by the published vapour pressure alone, a start for solvers; takes ln p. */
+export function guessTemperature(m: Medium, log: number): number {
   const equation = m.substance.saturation.pressure;
   let low = m.triple.T;
   let high = m.critical.T - criticalCap;

@@ -1,6 +1,13 @@
 import { NotConverged, OutOfRange } from '../errors.ts';
-import { gibbs } from '../models/fluidProperties.ts';
+import {
+  entropy,
+  gibbs,
+  pressure,
+  pressureOverTemperature,
+  pressureSlope,
+} from '../models/fluidProperties.ts';
 import { meltingPressure } from '../models/meltingPressure.ts';
+import type { SolidModel } from '../models/solidGibbs.ts';
 import { sublimationPressure } from '../models/sublimationPressure.ts';
 import type { MeltingLine, SublimationLine } from '../substances/substance.ts';
 import { densityAt } from './density.ts';
@@ -22,6 +29,49 @@ const slopeOf = (line: MeltingLine): number => {
 /** Liquid density on a melting line, null beyond the pressure to which the fluid equation holds. */
 function liquidDensity(m: Medium, T: number, p: number, start?: number): number | null {
   return p <= m.substance.fluid.validity.pmax ? densityAt(m, T, p, 'liquid', start) : null;
+}
+
+/**
+ * Solid and fluid in equilibrium by Newton in the fluid's density and in the one of T (K) and p (Pa)
+ * that is `free`, at once: equal pressure and Gibbs energy, both taken to first order about the
+ * fluid's own pressure P, so g_l(p) = g_l + (p − P)/ρ. Quick from a neighbour or a published curve;
+ * null where a step is long or leads off the fluid's side of the critical density.
+ *
+ * Error: steps shrink quadratically; the last one is below 1e-9 (of p: or 1 mPa on a melting line,
+ * where the Gibbs energies' rounding leaves about as much).
+ */
+function solvedAtOnce(
+  m: Medium,
+  solid: SolidModel,
+  start: { readonly T: number; readonly p: number; readonly rho: number },
+  free: 'T' | 'p',
+  fluid: 'liquid' | 'vapour',
+): SolidLinePoint | null {
+  let { T, p, rho } = start;
+  const small = 1e-9;
+  const floor = fluid === 'liquid' ? 1e-3 : 0;
+  for (let i = 0; i < 8; i++) {
+    const f = m.fluid.evaluate(T, rho);
+    const slope = pressureSlope(f);
+    if (!(slope > 0) || rho > m.critical.rho !== (fluid === 'liquid')) return null;
+    const s = solid(T, p);
+    const short = p - pressure(f);
+    const gap = s.g - gibbs(f) - short / rho;
+    const dT = free === 'T' ? gap / (-s.gT - entropy(f)) : 0;
+    const dp = free === 'p' ? gap / (1 / rho - s.gp) : 0;
+    const dRho = (short + dp - pressureOverTemperature(f) * dT) / slope;
+    if (!(Math.abs(dT) < 0.05 * T && Math.abs(dRho) < 0.3 * rho && p + dp > 0)) return null;
+    T += dT;
+    p += dp;
+    rho += dRho;
+    if (
+      Math.abs(dT) < small * T &&
+      Math.abs(dp) < small * p + floor &&
+      Math.abs(dRho) < small * rho
+    )
+      return { T, p, rho };
+  }
+  return null;
 }
 
 /**
@@ -47,8 +97,8 @@ export function meltingPressureRange(m: Medium, line: MeltingLine): readonly [nu
 /**
  * Point of a melting line at temperature T (K).
  *
- * Method: `equilibrium` lines solve g(solid) = g(liquid) by Newton in p, dp = −Δg/Δv, from the
- * published curve; others evaluate the published curve.
+ * Method: `equilibrium` lines solve g(solid) = g(liquid) from a neighbour by `solvedAtOnce`, else by
+ * Newton in p, dp = −Δg/Δv, from the published curve; others evaluate the published curve.
  * Domain: the line's own range, ends included; elsewhere throws OutOfRange.
  */
 export function meltingPoint(
@@ -73,6 +123,10 @@ export function meltingPoint(
     p += start.p - meltingPressure(line.equation, start.T);
     rho = start.rho ?? undefined;
   }
+  if (rho !== undefined) {
+    const solved = solvedAtOnce(m, solid, { T, p, rho }, 'p', 'liquid');
+    if (solved) return solved;
+  }
   let last = Infinity;
   for (let i = 0; i < 50; i++) {
     rho = densityAt(m, T, Math.max(p, 1), 'liquid', rho);
@@ -95,7 +149,7 @@ export function meltingPoint(
 /**
  * Point of a melting line at pressure p (Pa); the better-posed direction for ice Ih.
  *
- * Method: `equilibrium` lines by Newton in T, dT = (g_s − g_l)/(s_s − s_l), held inside the line's
+ * Method: `equilibrium` lines from a neighbour by `solvedAtOnce`, else by Newton in T, dT = (g_s − g_l)/(s_s − s_l), held inside the line's
  * range; others invert the published curve in a bracket.
  * Domain: the pressures of the line's own range; elsewhere throws OutOfRange.
  */
@@ -128,6 +182,10 @@ export function meltingPointAtPressure(
   // The range ends where the published curve does; the solved line may pass it by a hair.
   const low = Tmin - 0.05;
   const high = Tmax + 0.05;
+  if (start?.rho) {
+    const solved = solvedAtOnce(m, solid, { T: start.T, p, rho: start.rho }, 'T', 'liquid');
+    if (solved && solved.T >= low && solved.T <= high) return solved;
+  }
   // From a far neighbour Newton may ask for a liquid where there is none.
   const near = start && Math.abs(start.p - p) < 0.1 * p ? start : undefined;
   let T = near?.T ?? startTemperature(line, p);
@@ -167,7 +225,7 @@ function startTemperature(line: MeltingLine, p: number): number {
 /**
  * Point of a sublimation line at temperature T (K).
  *
- * Method: `equilibrium` lines solve g(solid) = g(vapour) by Newton in ln p with the slope
+ * Method: `equilibrium` lines solve g(solid) = g(vapour) by `solvedAtOnce`, else by Newton in ln p with the slope
  * (v_s − v_v) p, steps of at most 1; others evaluate the published curve.
  * Domain: the line's own range, ends included; elsewhere throws OutOfRange.
  */
@@ -182,13 +240,17 @@ export function sublimationPoint(
     throw new OutOfRange('T', T, { min: Tmin, max: Tmax }, line.equation.source, 'K');
   if (line.route !== 'equilibrium') {
     const p = sublimationPressure(line.equation, T);
-    return { T, p, rho: p / (m.fluid.R * T) };
+    return { T, p, rho: vapourDensity(m, T, p, p / (m.fluid.R * T)) };
   }
   if (Math.abs(T - m.triple.T) < 1e-9) return { T, p: m.triple.p, rho: m.triple.rhoV };
   const solid = m.solids.get(line.solid!)!.model;
   const RT = m.fluid.R * T;
-  let p = start?.p ?? sublimationPressure(line.equation, T);
-  let rho = start?.rho ?? p / RT;
+  // The published curve lies parallel to the solved one, on a logarithmic scale.
+  let p = sublimationPressure(line.equation, T);
+  if (start) p *= start.p / sublimationPressure(line.equation, start.T);
+  let rho = start?.rho ? (start.rho * start.T * p) / (T * start.p) : p / RT;
+  const solved = solvedAtOnce(m, solid, { T, p, rho }, 'p', 'vapour');
+  if (solved) return solved;
   let last = Infinity;
   for (let i = 0; i < 100; i++) {
     rho = vapourDensity(m, T, p, rho);

@@ -19,6 +19,8 @@ export interface State {
   readonly parts: readonly Part[];
   /** Number of fractions that the givens leave open. */
   readonly freedom: 0 | 1 | 2;
+  /** Properties of the whole that were given and stand although fractions are open. */
+  readonly known?: { readonly h?: number; readonly s?: number; readonly v?: number };
 }
 
 /** Properties of one phase, null where no published equation gives them. */
@@ -116,6 +118,8 @@ export function saturatedPhases(s: {
 
 /** A specific property of the whole state (per kg), null where a part lacks it or a share is open. */
 export function overall(state: State, property: 'h' | 's' | 'u' | 'v'): number | null {
+  const given = property === 'u' ? undefined : state.known?.[property];
+  if (given !== undefined) return given;
   let sum = 0;
   for (const { fraction, properties } of state.parts) {
     if (typeof fraction !== 'number' || properties === null) return null;

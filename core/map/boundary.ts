@@ -63,10 +63,40 @@ export function boundaryCurves(m: Medium): readonly BoundaryCurve[] {
     ...m.substance.sublimation.map((line) => sublimationCurve(m, line)),
     ...m.substance.melting.map((line) => meltingCurve(m, line)),
     saturationCurve(m),
-  ];
+  ].map(remembering);
   known.set(m, made);
   return made;
 }
+
+/** Points that a curve keeps for each of its two directions. */
+const mostPoints = 512;
+
+/** A function of a number that knows its last values; a neighbour only starts a solver closer. */
+function remembered(
+  solve: (at: number, near?: BoundaryPoint) => BoundaryPoint,
+): (at: number, near?: BoundaryPoint) => BoundaryPoint {
+  const points = new Map<number, BoundaryPoint>();
+  return (at, near) => {
+    // A trace asks for each of its many points once.
+    if (near) return solve(at, near);
+    const ready = points.get(at);
+    if (ready) return ready;
+    const point = solve(at);
+    if (points.size >= mostPoints) points.clear();
+    points.set(at, point);
+    return point;
+  };
+}
+
+/**
+ * The same temperatures and pressures are asked for over and over: a run's meetings, margins and
+ * error boxes at one place, and all of its other places while one of them is dragged.
+ */
+const remembering = (curve: BoundaryCurve): BoundaryCurve => ({
+  ...curve,
+  atTemperature: remembered((T, near) => curve.atTemperature(T, near)),
+  atPressure: remembered((p, near) => curve.atPressure(p, near)),
+});
 
 function saturationCurve(m: Medium): BoundaryCurve {
   const { triple, critical, substance } = m;

@@ -143,7 +143,7 @@ export function regions(m: Medium, plane: Plane, traced: readonly Boundary[]): r
     { ...saturationRun.at(-1)!, edge: 'convention' },
     corner(validity.Tmax, critical.p, 'validity'),
     corner(validity.Tmax, nothing, 'frame'),
-    corner(sublimation.length > 0 ? coldest : triple.T, nothing, 'validity'),
+    corner(coldest, nothing, sublimation.length > 0 ? 'validity' : 'unknown'),
   ]);
   const hot = melting
     .filter(({ T }) => T[1] > critical.T)

@@ -35,13 +35,14 @@ function clip(curve: BoundaryCurve, plane: Plane): Ends | null {
   return a && b && (a.T !== b.T || a.p !== b.p) ? [a, b] : null;
 }
 
+/** Distance of a place from a chord, signed by its side. */
 const deviation = (m: Place, a: Place, b: Place): number => {
   const dx = b[0] - a[0];
   const dy = b[1] - a[1];
   const length = Math.hypot(dx, dy);
   return length === 0
     ? Math.hypot(m[0] - a[0], m[1] - a[1])
-    : Math.abs(dx * (m[1] - a[1]) - dy * (m[0] - a[0])) / length;
+    : (dx * (m[1] - a[1]) - dy * (m[0] - a[0])) / length;
 };
 
 /**
@@ -49,8 +50,9 @@ const deviation = (m: Place, a: Place, b: Place): number => {
  *
  * Method: the frame's own crossings are solved; between them segments are halved, in the axis along
  * which the curve is single-valued, until the midpoint lies within 4 × 0.4 × `tolerance` of its
- * chord; the midpoint then becomes a vertex too, which leaves a quarter of that deviation. The
- * factor leaves room for segments about an inflection, whose midpoints lie near their chords.
+ * chord; the midpoint then becomes a vertex too, which leaves a quarter of that deviation. About an
+ * inflection a midpoint lies near its chord by chance: a bend that is even has a quarter of the chord's
+ * above, and half of what it differs from that bounds what the halves leave.
  * Returns null where the curve does not enter the frame.
  */
 export function trace(
@@ -75,19 +77,21 @@ export function trace(
     b: BoundaryPoint,
     sb: number,
     depth: number,
+    above: number,
   ): void => {
     const s = 0.5 * (sa + sb);
     const middle = at(s, points[points.length - 1]!);
     const d = deviation(plane.project(middle)!, plane.project(a)!, plane.project(b)!);
-    if (depth > 2 && (d <= 1.6 * tolerance || depth > 18)) {
+    const left = 0.25 * Math.abs(d) + 0.5 * Math.abs(d - 0.25 * above);
+    if (depth > 2 && ((Math.abs(d) <= 1.6 * tolerance && left <= tolerance) || depth > 18)) {
       points.push(middle, b);
       return;
     }
-    refine(a, sa, middle, s, depth + 1);
-    refine(middle, s, b, sb, depth + 1);
+    refine(a, sa, middle, s, depth + 1, d);
+    refine(middle, s, b, sb, depth + 1, d);
   };
   const [sa, sb] = ends.map(shareOf) as [number, number];
-  refine(ends[0], sa, ends[1], sb, 0);
+  refine(ends[0], sa, ends[1], sb, 0, 0);
   return {
     id: curve.id,
     kind: curve.kind,

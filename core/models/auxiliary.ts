@@ -4,7 +4,7 @@ import type { AuxiliaryEquation } from '../substances/substance.ts';
  * Value of a published auxiliary equation of the saturation line at T (K), in the unit of its
  * reducing value (Pa or kg/m³).
  *
- * Domain: T > 0; at or above T* the reducing value is returned. Meant for first guesses and checks.
+ * Domain: T > 0; at or above T* the value at T* is returned. Meant for first guesses and checks.
  * Source: the equation's own, e.g. IAPWS SR1-86(1992), equations 1 to 3.
  */
 export function auxiliary(equation: AuxiliaryEquation, T: number): number {
@@ -13,5 +13,6 @@ export function auxiliary(equation: AuxiliaryEquation, T: number): number {
   let sum = 0;
   for (let i = 0; i < a.length; i++) sum += a[i]! * x ** t[i]!;
   if (kind === 'sum') return reducing.y * (1 + sum);
+  if (kind === 'plain sum') return reducing.y * sum;
   return reducing.y * Math.exp(kind === 'exponential' ? sum : (sum * reducing.T) / T);
 }

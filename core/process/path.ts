@@ -2,6 +2,7 @@ import * as v from 'valibot';
 import { parseReading, ReadingError } from '../units/index.ts';
 import type { Encounter } from './encounter.ts';
 import type { HeatAbsent, Outcome } from './outcome.ts';
+import type { Part } from '../equilibrium/state.ts';
 import { StepFailure, stepProblemOf, type Leg, type StepProblem } from './problem.ts';
 import { standAt, standOn, type Stand } from './stand.ts';
 import {
@@ -159,13 +160,42 @@ function kept<K extends object, V>(
   key: K,
   from: Stand | null,
   env: Env,
-  make: () => V,
+  make: (before: V | undefined) => V,
 ): V {
   const ready = map.get(key);
   if (ready && ready.from === from && sameEnv(ready.env, env)) return ready.value;
-  const value = make();
+  const value = make(ready && sameEnv(ready.env, env) ? ready.value : undefined);
   map.set(key, { from, env, value });
   return value;
+}
+
+const sameFraction = (a: Part['fraction'], b: Part['fraction']): boolean =>
+  typeof a === 'number' || typeof b === 'number' ? a === b : a[0] === b[0] && a[1] === b[1];
+
+/** Whether two stands are one in every number; properties follow from the rest. */
+const sameStand = (a: Stand, b: Stand): boolean =>
+  a.on === b.on &&
+  a.mass === b.mass &&
+  a.state.T === b.state.T &&
+  a.state.p === b.state.p &&
+  a.state.freedom === b.state.freedom &&
+  a.state.parts.length === b.state.parts.length &&
+  a.state.parts.every(({ phase, solid, rho, fraction }, i) => {
+    const other = b.state.parts[i]!;
+    return (
+      phase === other.phase &&
+      solid === other.solid &&
+      rho === other.rho &&
+      sameFraction(fraction, other.fraction)
+    );
+  });
+
+/** A step that ends where it ended before ends in the very same stand, so that the next is kept. */
+function runAgain(step: Step, from: Stand, env: Env, before: StepRun | undefined): StepRun {
+  const run = runStep(step, from, env);
+  return run.end && before?.end && sameStand(run.end, before.end)
+    ? { ...run, end: before.end }
+    : run;
 }
 
 export interface PathRun {
@@ -196,7 +226,7 @@ export function runPath(
   for (const step of path.steps) {
     const from = stand;
     const run: StepRun = from
-      ? kept(steps, step, from, env, () => runStep(step, from, env))
+      ? kept(steps, step, from, env, (before) => runAgain(step, from, env, before))
       : {
           step,
           from: null,

@@ -1,4 +1,4 @@
-import { NotConverged, OutOfRange, Undetermined, Unknown } from '../errors.ts';
+import { NotConverged, OutOfRange, Undetermined, Unknown, type UnknownReason } from '../errors.ts';
 import type { BoundaryKind } from '../map/boundary.ts';
 import { ReadingError, type ReadingIssue } from '../units/index.ts';
 
@@ -18,7 +18,7 @@ export type StateProblem =
       readonly boundary: string;
       readonly needs: 'vapour fraction' | 'solid fraction';
     }
-  | { readonly code: 'unknown'; readonly reason: string }
+  | { readonly code: 'unknown'; readonly reason: UnknownReason }
   /** A defect of ours: the solver gave up. Told at its item, so that the rest of the sheet stands. */
   | { readonly code: 'unsolved'; readonly solver: string };
 

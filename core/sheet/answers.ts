@@ -41,10 +41,10 @@ export function lineAtPressure(m: Medium, p: number): LineAnswer | null {
     const s = saturationAtPressure(m, p);
     return { line: 'saturation', T: s.T, p, slope: saturationSlope(m, s) };
   }
-  const line = m.substance.sublimation.find(
-    ({ range }) =>
-      p < m.triple.p && p >= sublimationPoint(m, sublimationLineAt(m, range.Tmin)!, range.Tmin).p,
-  );
+  const line = m.substance.sublimation.find((one) => {
+    const [low, high] = [one.range.Tmin, one.range.Tmax].map((T) => sublimationPoint(m, one, T).p);
+    return p < m.triple.p && p >= low! && p <= high!;
+  });
   if (!line) return null;
   const { T } = sublimationPointAtPressure(m, line, p);
   return { line: 'sublimation', T, p, slope: sublimationSlope(m, T) };

@@ -7,7 +7,7 @@ import { margins, type Margin } from '../map/margins.ts';
 import { scale, temperaturePressurePlane, type Plane } from '../map/plane.ts';
 import { regions, type Region } from '../map/regions.ts';
 import { trace } from '../map/trace.ts';
-import { problemOf, type StateProblem } from '../process/problem.ts';
+import { problemOf, type Leg, type StateProblem } from '../process/problem.ts';
 import type { Substance } from '../substances/substance.ts';
 import { absolutePressure, parseReading, temperature, type UnitId } from '../units/index.ts';
 import { kept } from './kept.ts';
@@ -20,6 +20,7 @@ import type {
   Results,
   SiteResult,
   StateResult,
+  Track,
 } from './results.ts';
 import type { Sheet, Site, StateItem, View } from './schema.ts';
 import { localPressure, siteErrors } from './site.ts';
@@ -30,7 +31,7 @@ export { problemOf };
 /** Size in mm of a view's frame on its page, which the caption's length may change. */
 export type FrameOf = (
   view: View,
-  about: Pick<Results, 'cautions' | 'sites' | 'formulations'>,
+  about: Pick<Results, 'cautions' | 'sites' | 'formulations' | 'absent'>,
 ) => { readonly width: number; readonly height: number };
 
 const siteOf = (sheet: Sheet, id: string | undefined): Site | undefined =>
@@ -97,6 +98,8 @@ function formulations({ fluid, solids, melting, sublimation }: Substance): reado
   return [...new Set([fluid.formulation, ...solids.map((s) => s.formulation), ...published])];
 }
 
+const absentLines = ({ absent }: Substance) => absent.map(({ boundary }) => boundary);
+
 function mapPoints(m: Medium): readonly MapPoint[] {
   const { substance, triple, critical } = m;
   return [
@@ -122,6 +125,8 @@ function mapPoints(m: Medium): readonly MapPoint[] {
 interface Lines {
   readonly boundaries: readonly Boundary[];
   readonly regions: readonly Region[];
+  /** Vertices of the legs drawn on the plane so far. */
+  readonly tracks: WeakMap<Leg, Track['points']>;
 }
 const traced = new WeakMap<Medium, Map<string, Lines>>();
 /** Planes whose lines are kept for each substance. */
@@ -138,7 +143,11 @@ function linesOf(m: Medium, plane: Plane): Lines {
   const boundaries = boundaryCurves(m)
     .map((curve) => trace(curve, plane))
     .filter((b) => b !== null);
-  const lines = { boundaries, regions: regions(m, plane, boundaries) };
+  const lines = {
+    boundaries,
+    regions: regions(m, plane, boundaries),
+    tracks: new WeakMap<Leg, Track['points']>(),
+  };
   if (planes.size >= mostPlanes) planes.delete(planes.keys().next().value!);
   planes.set(key, lines);
   return lines;
@@ -181,7 +190,7 @@ function evaluateMap(
     p: scale(view.pressure.scale, p),
     ...size,
   });
-  const { boundaries, regions: fields } = linesOf(m, plane);
+  const { boundaries, regions: fields, tracks } = linesOf(m, plane);
   const inside = (t: number, q: number) => t >= T[0] && t <= T[1] && q >= p[0] && q <= p[1];
   const { validity } = m.substance.fluid;
   return {
@@ -192,8 +201,9 @@ function evaluateMap(
     ...size,
     boundaries,
     regions: fields,
-    tracks: tracksOf(own, plane, boundaries),
+    tracks: tracksOf(own, plane, boundaries, tracks),
     points: mapPoints(m).filter((point) => inside(point.T, point.p)),
+    absent: absentLines(m.substance),
     validity: { T: [validity.vapourTmin, validity.Tmax], pmax: validity.pmax },
     outside: run.filter((s) => !inside(s.T, s.p)).map((s) => s.id),
   };
@@ -274,6 +284,9 @@ export function evaluate(
     cautions: cautions(judged),
     formulations: Object.fromEntries(
       sheet.substances.map((id) => [id, formulations(mediumOf(id).substance)]),
+    ),
+    absent: Object.fromEntries(
+      sheet.substances.map((id) => [id, absentLines(mediumOf(id).substance)]),
     ),
   };
   return {

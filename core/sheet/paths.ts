@@ -3,6 +3,7 @@ import { margins, type Margin } from '../map/margins.ts';
 import type { Plane } from '../map/plane.ts';
 import type { Boundary } from '../map/boundary.ts';
 import { heatAbsentOf, runPath } from '../process/path.ts';
+import type { Leg } from '../process/problem.ts';
 import type { Stand } from '../process/stand.ts';
 import type { Env } from '../process/step.ts';
 import { trackOf } from '../process/track.ts';
@@ -20,6 +21,11 @@ export const pathStateId = (path: string, step: string | null): string =>
 /** Margins of a stand, kept with it: a run keeps the stands that did not change. */
 const marginsOf = kept(({ state, on }: Stand, m: Medium): readonly Margin[] =>
   margins(m, state.T, state.p, on),
+);
+
+/** The boundary that a stand's error box touches, kept in the same way. */
+const touchedBy = kept(({ state }: Stand, m: Medium, T: number, p: number): string | null =>
+  touched(m, state, { T, p }),
 );
 
 /**
@@ -62,7 +68,7 @@ export const evaluatePath = kept(function evaluatePath(
       problem: null,
       margins: found,
       error,
-      touches: touched(m, state, error),
+      touches: touchedBy(stand, m, error.T, error.p),
       on: stand.on,
       mass: stand.mass,
     };
@@ -114,19 +120,19 @@ export const evaluatePath = kept(function evaluatePath(
   };
 });
 
-/** The paths of a map's substance as vertices on its plane. */
+/** The paths of a map's substance as vertices on its plane. `known` are those made for this plane before. */
 export const tracksOf = (
   paths: readonly PathResult[],
   plane: Plane,
   traced: readonly Boundary[],
+  known: WeakMap<Leg, Track['points']>,
 ): readonly Track[] =>
   paths.flatMap((path) =>
     path.steps.flatMap((step) =>
-      step.legs.map((leg) => ({
-        path: path.id,
-        step: step.id,
-        along: leg.along,
-        points: trackOf(leg, plane, traced),
-      })),
+      step.legs.map((leg) => {
+        const points = known.get(leg) ?? trackOf(leg, plane, traced);
+        known.set(leg, points);
+        return { path: path.id, step: step.id, along: leg.along, points };
+      }),
     ),
   );

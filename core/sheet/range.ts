@@ -1,5 +1,5 @@
 import type { Medium } from '../equilibrium/medium.ts';
-import { saturationAtPressure } from '../equilibrium/saturation.ts';
+import { boundaryCurves } from '../map/boundary.ts';
 import { fromSI, toSI, type UnitId } from '../units/index.ts';
 
 type Ends = readonly [low: number, high: number];
@@ -48,9 +48,10 @@ function boilingNear(
   m: Medium,
   places: readonly { readonly T: number; readonly p: number }[],
 ): readonly number[] {
+  const saturation = boundaryCurves(m).find(({ kind }) => kind === 'saturation')!;
   return places
     .filter(({ p }) => p > m.triple.p && p < m.critical.p)
-    .map(({ T, p }) => ({ T, boils: saturationAtPressure(m, p).T }))
+    .map(({ T, p }) => ({ T, boils: saturation.atPressure(p).T }))
     .filter(({ T, boils }) => Math.abs(boils - T) < 120)
     .map(({ boils }) => boils);
 }

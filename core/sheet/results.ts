@@ -137,6 +137,8 @@ export interface MapResult {
   readonly regions: readonly Region[];
   readonly points: readonly MapPoint[];
   readonly tracks: readonly Track[];
+  /** Boundaries that nobody has published, which would bound the fields on the cold side. */
+  readonly absent: readonly ('melting' | 'sublimation')[];
   /** Where the equations end, for what is drawn beyond. */
   readonly validity: { readonly T: readonly [number, number]; readonly pmax: number };
   /** Ids of states, of paths' too, that lie outside the frame. */
@@ -151,4 +153,6 @@ export interface Results {
   readonly cautions: readonly Caution[];
   /** Formulations used, by substance id, the fluid's first. */
   readonly formulations: Readonly<Record<string, readonly string[]>>;
+  /** Boundaries that nobody has published, by substance id; none where all are. */
+  readonly absent: Readonly<Record<string, readonly ('melting' | 'sublimation')[]>>;
 }

@@ -200,7 +200,9 @@ export const carbonDioxide: Substance = {
       molarMass: 0.0440098,
       // g[0] and g[1] are anchored to this file's fluid equation, so that solid, liquid and vapour
       // have equal Gibbs energies at 216.592 K and the heat of fusion there is 8875 J/mol. The
-      // published pair (−2.6385478, 4.5088732) belongs to another reference state of the fluid.
+      // published pair belongs to a fluid with h = 200 kJ/kg and s = 1 kJ/(kg K) for the saturated
+      // liquid at 273.15 K (table 2).
+      publishedReference: [-2.6385478, 4.5088732],
       g: [
         -6.023632394244669, 19.006856209667113, -2.0109135, -2.7976237, 0.26427834, 3.8259935,
         0.31711996, 0.0022087195, -1.1289668, 0.0092923982, 3391.4617,

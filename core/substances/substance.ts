@@ -33,7 +33,7 @@ export interface Substance {
   /** Boundaries that no source covers, each with its reason. */
   readonly absent: readonly {
     readonly boundary: 'melting' | 'sublimation';
-    readonly reason: string;
+    readonly reason: AbsenceReason;
   }[];
   /** Published equations of the saturation line: first guesses and checks, never results. */
   readonly saturation: {
@@ -51,20 +51,30 @@ export interface Substance {
   readonly referenceState: ReferenceState;
 }
 
+/** Why a boundary is absent, a code that app/words spells out. */
+export type AbsenceReason = 'not published';
+
+/** What a substance does to people and plant, a code that app/words spells out. */
 export type Hazard =
   | 'scald'
   | 'pressure'
   | 'asphyxiation'
+  | 'displaces air'
   | 'cold burn'
+  | 'cryogenic'
   | 'dry ice blocks lines'
   | 'toxic'
   | 'flammable'
-  | 'oxidiser'
-  | 'cryogenic';
+  | 'mildly flammable'
+  | 'toxic in fire'
+  | 'oxidiser';
 
 export type ReferenceState =
   | 'liquid at the triple point'
+  | 'liquid at the triple point: h = s = 0'
   | 'ideal gas at 298.15 K and 101.325 kPa'
+  | 'ideal gas at 298.15 K and 101.325 kPa: 8670 J/mol, 191.5 J/(mol K)'
+  | 'ideal gas at 298.15 K and 101.325 kPa: 8680 J/mol, 205.043 J/(mol K)'
   | 'liquid at 273.15 K: 200 kJ/kg, 1 kJ/(kg K)'
   | 'liquid at the normal boiling point'
   | 'as published';
@@ -201,6 +211,8 @@ export interface DryIceEquation {
   readonly g: readonly number[];
   readonly gAlpha: readonly number[];
   readonly gKappa: readonly number[];
+  /** g0 and g1 as published, where `g` is anchored to another reference state; for checks alone. */
+  readonly publishedReference: readonly [number, number];
   readonly validity: SolidValidity;
 }
 export type SolidEquation = IceIhEquation | DryIceEquation;
@@ -216,7 +228,10 @@ export interface SolidValidity extends Range {
 
 /** Melting pressure over temperature, θ = T/T*. */
 export type MeltingEquation = {
+  /** Short, for captions. */
   readonly source: string;
+  /** The source in full, where it is not the fluid equation's or the short one says it all. */
+  readonly citation?: string;
   readonly range: Range;
   readonly reducing: { readonly T: number; readonly p: number };
 } & (
@@ -248,7 +263,10 @@ export type MeltingEquation = {
 
 /** Sublimation pressure over temperature, θ = T/T*. */
 export type SublimationEquation = {
+  /** Short, for captions. */
   readonly source: string;
+  /** The source in full, where it is not the fluid equation's or the short one says it all. */
+  readonly citation?: string;
   readonly range: Range;
   readonly reducing: { readonly T: number; readonly p: number };
 } & (
@@ -304,10 +322,10 @@ export interface SublimationLine {
 /** A published auxiliary equation in x = 1 − T/T*. */
 export interface AuxiliaryEquation {
   /**
-   * sum: y/y* = 1 + Σ aᵢ x^tᵢ; exponential: ln(y/y*) = Σ aᵢ x^tᵢ;
+   * sum: y/y* = 1 + Σ aᵢ x^tᵢ; plain sum: y/y* = Σ aᵢ x^tᵢ; exponential: ln(y/y*) = Σ aᵢ x^tᵢ;
    * exponential over temperature: ln(y/y*) = (1 / (1 − x)) Σ aᵢ x^tᵢ
    */
-  readonly kind: 'sum' | 'exponential' | 'exponential over temperature';
+  readonly kind: 'sum' | 'plain sum' | 'exponential' | 'exponential over temperature';
   readonly reducing: { readonly T: number; readonly y: number };
   readonly a: readonly number[];
   readonly t: readonly number[];
@@ -348,4 +366,35 @@ export interface IndustrialSaturationEquation {
   ];
   readonly range: Range & { readonly pmin: number; readonly pmax: number };
   readonly source: string;
+}
+
+/** What a check's value is worth: where its digits come from. */
+export type CheckProvenance =
+  'published, one text' | 'published, two texts' | 'recalled' | 'computed' | 'computed elsewhere';
+
+/** A state at which a source tabulates values; SI. */
+export interface CheckState {
+  readonly T?: number;
+  readonly p?: number;
+  readonly rho?: number;
+  /** Id of the published equation that is meant, where that is not told by the kind. */
+  readonly correlation?: string;
+}
+
+/** Values that a source prints, to be computed again; `value` is SI, `printed` keeps the digits. */
+export interface Checks {
+  readonly groups: readonly {
+    /** How the values are computed, a key of `evaluations`. */
+    readonly kind: string;
+    readonly source: string;
+    readonly provenance: string;
+    readonly states: readonly {
+      readonly at: CheckState;
+      readonly values: {
+        readonly [property: string]:
+          | { readonly value: number; readonly printed: string; readonly toleranceAbs: number }
+          | undefined;
+      };
+    }[];
+  }[];
 }

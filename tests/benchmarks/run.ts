@@ -1,14 +1,17 @@
 /*
- * Ratios within one run, never times: `npm run bench`. Every figure is the median of several rounds
+ * Ratios within one run; times only for the record: `npm run bench`. Every figure is the median of several rounds
  * in which the work and what it is measured by take turns.
  */
 import { medium, type Medium } from '../../core/equilibrium/medium.ts';
 import { saturationAt } from '../../core/equilibrium/saturation.ts';
 import { carbonDioxide } from '../../core/substances/carbon-dioxide.ts';
 import { water } from '../../core/substances/water.ts';
+import { boundaryCurves } from '../../core/map/boundary.ts';
+import { scale, temperaturePressurePlane } from '../../core/map/plane.ts';
+import { trace } from '../../core/map/trace.ts';
 import { random } from '../random.ts';
 import { report } from './report.ts';
-import { drained, ratioOf } from './timing.ts';
+import { drained, median, ratioOf, timesOf } from './timing.ts';
 import { Yardstick } from './yardstick.ts';
 
 const states = 4096;
@@ -71,10 +74,37 @@ function evaluations(m: Medium): void {
   report(`${id}: saturation state against evaluation`, ratioOf(saturateAll, evaluateAll), 12);
 }
 
-/** The whole map of a substance against its evaluations: for the tracing of boundaries to fill in. */
-function wholeMap(): void {}
+/** Every boundary of the whole map at printed size: evaluations a vertex, and milliseconds for the record. */
+function wholeMap(
+  m: Medium,
+  T: readonly [number, number],
+  p: readonly [number, number],
+  goal: number,
+): void {
+  const { id } = m.substance;
+  let maps = 0;
+  const traceAll = (): number => {
+    // Another map each time, since points solved before are remembered.
+    const shift = 0.01 * maps++;
+    const plane = temperaturePressurePlane({
+      T: scale('linear', [T[0] + shift, T[1] + shift]),
+      p: scale('logarithmic', [p[0] * (1 + shift), p[1] * (1 + shift)]),
+      width: 190,
+      height: 120,
+    });
+    return boundaryCurves(m).reduce((n, c) => n + (trace(c, plane)?.points.length ?? 0), 0);
+  };
+  // The ends of the lines are solved once for a substance, not for a map.
+  traceAll();
+  const before = m.fluid.count;
+  const vertices = traceAll();
+  report(`${id}: evaluations a vertex of the whole map`, (m.fluid.count - before) / vertices, goal);
+  console.log(`  ${vertices} vertices in ${median(timesOf(traceAll)).toFixed(1)} ms`);
+}
 
 evaluations(medium(water));
 evaluations(medium(carbonDioxide));
-wholeMap();
+const celsius = (t: number): number => t + 273.15;
+wholeMap(medium(water), [celsius(-60), celsius(460)], [1, 1e9], 12);
+wholeMap(medium(carbonDioxide), [celsius(-120), celsius(120)], [1e2, 8e8], 12);
 if (!Number.isFinite(drained())) throw new Error(`a benchmark gave ${drained()}`);

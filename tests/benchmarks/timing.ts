@@ -11,8 +11,12 @@ const once = (f: () => number): number => {
   return performance.now() - begin;
 };
 
-const median = (list: readonly number[]): number =>
+export const median = (list: readonly number[]): number =>
   [...list].sort((a, b) => a - b)[list.length >> 1]!;
+
+/** Milliseconds of each of several rounds. */
+export const timesOf = (work: () => number, rounds = 25): readonly number[] =>
+  Array.from({ length: rounds }, () => once(work));
 
 /**
  * Median over `rounds` of the time of `work` over the time of `yardstick`, both doing the same number

@@ -3,10 +3,13 @@ import { medium } from '../../core/equilibrium/medium.ts';
 import { stablePhase } from '../../core/equilibrium/phase.ts';
 import { saturationAt, saturationAtPressure } from '../../core/equilibrium/saturation.ts';
 import {
+  meltingPoint,
   meltingPointAtPressure,
+  sublimationPoint,
   sublimationPointAtPressure,
 } from '../../core/equilibrium/solidLines.ts';
 import { pressure, pressureSlope } from '../../core/models/fluidProperties.ts';
+import { catalogue } from '../../core/substances/catalogue.ts';
 import { carbonDioxide } from '../../core/substances/carbon-dioxide.ts';
 import { water } from '../../core/substances/water.ts';
 
@@ -49,6 +52,55 @@ describe('what every plant knows (common practice, no source)', () => {
   it('a cylinder of carbon dioxide at 20 °C stands at about 57 bar', () => {
     expect(Math.abs(saturationAt(gas, celsius(20)).p - 57e5)).toBeLessThan(0.5e5);
   });
+});
+
+describe('fixed points of every substance', async () => {
+  const all = await Promise.all(catalogue.map(async ({ load }) => medium(await load())));
+  it.each(all.map((m) => [m.substance.id, m] as const))(
+    '%s: triple, normal and critical point are the published ones',
+    (id, m) => {
+      const { substance, triple, critical } = m;
+      // The butanes' papers print the pressure of their auxiliary equations, 4.5 % and 1.9 % off.
+      const within = { isobutane: 0.046, 'n-butane': 0.02 }[id] ?? 3e-3;
+      expect(Math.abs(triple.p / substance.triplePoints[0].p - 1)).toBeLessThan(within);
+      expect(triple.T).toBe(substance.triplePoints[0].T);
+
+      const { normalPoint } = substance;
+      const T =
+        normalPoint.kind === 'boiling'
+          ? saturationAtPressure(m, 101325).T
+          : sublimationPointAtPressure(m, substance.sublimation[0]!, 101325).T;
+      // Millikelvins but for dry ice, whose solid is solved from another paper's equation.
+      expect(Math.abs(T - normalPoint.T)).toBeLessThan(
+        normalPoint.kind === 'boiling' ? 2e-3 : 0.03,
+      );
+
+      // Where the equation's own critical point is not the published one, by how much.
+      const apart = { oxygen: [2e-4, 0.022], 'ammonia-1993': [3e-4, 3e-3] }[id] ?? [1e-5, 2e-4];
+      expect(Math.abs(critical.T / substance.critical.T - 1)).toBeLessThan(apart[0]!);
+      expect(Math.abs(critical.rho / substance.critical.rho - 1)).toBeLessThan(apart[1]!);
+      m.fluid.evaluate(critical.T, critical.rho);
+      expect(Math.abs(pressureSlope(m.fluid)) / (m.fluid.R * critical.T)).toBeLessThan(1e-5);
+      expect(Math.abs(pressure(m.fluid) / critical.p - 1)).toBeLessThan(1e-7);
+    },
+  );
+
+  it.each(all.map((m) => [m.substance.id, m] as const))(
+    '%s: lines about the triple point meet in it without a gap',
+    (_, m) => {
+      const { melting, sublimation } = m.substance;
+      if (melting.length === 0) return expect(m.substance.absent).not.toEqual([]);
+      const meets = (p: number): void => expect(Math.abs(p / m.triple.p - 1)).toBeLessThan(1e-9);
+      meets(meltingPoint(m, melting[0]!, m.triple.T).p);
+      meets(sublimationPoint(m, sublimation.at(-1)!, m.triple.T).p);
+      sublimation.slice(1).forEach((line, i) => {
+        const [a, b] = [sublimation[i]!, line];
+        const T = b.range.Tmin;
+        expect(a.range.Tmax).toBe(T);
+        expect(sublimationPoint(m, a, T).p / sublimationPoint(m, b, T).p).toBeCloseTo(1, 8);
+      });
+    },
+  );
 });
 
 describe('fixed points', () => {

@@ -1,10 +1,10 @@
 import type { Point, Rect, Shape, Unplaced } from '../scene/scene.ts';
 import { overlap, segmentHits, type Box, type Segment } from './box.ts';
-import type { Candidate } from './candidate.ts';
+import type { Candidate, Page } from './candidate.ts';
 import { choiceOf, type Choice } from './choice.ts';
-import { labelShapes } from './labelShapes.ts';
+import { labelShapes, type LabelShapes } from './labelShapes.ts';
 import { movedCandidate } from './moved.ts';
-import { obstacleIndex, type Obstacles } from './obstacles.ts';
+import { obstacleIndex, type ObstacleIndex, type Obstacles } from './obstacles.ts';
 import type { LabelRequest } from './request.ts';
 
 /** Where a label stands, for picking and for tests. */
@@ -138,6 +138,42 @@ function textOf(request: LabelRequest): string {
   return request.runs.map(({ text }) => text).join('');
 }
 
+/** Where moved labels stand, kept with their requests: while something is dragged most are the same. */
+const stands = new WeakMap<LabelRequest, { readonly frame: Rect; readonly place: Candidate }>();
+
+function standing(request: LabelRequest, offset: Point, frame: Rect): Candidate {
+  const ready = stands.get(request);
+  if (ready?.frame === frame) return ready.place;
+  const place = movedCandidate(request, offset, frame);
+  stands.set(request, { frame, place });
+  return place;
+}
+
+/** Shapes by their place, which belongs to one label. */
+const drawings = new WeakMap<Candidate, LabelShapes>();
+
+function drawing(request: LabelRequest, place: Candidate): LabelShapes {
+  const ready = drawings.get(place) ?? labelShapes(request, place);
+  drawings.set(place, ready);
+  return ready;
+}
+
+/** A label that has no place. */
+export const unplacedOf = (request: LabelRequest): Unplaced => ({
+  id: request.id,
+  text: textOf(request),
+});
+
+function overlapsOf(labels: readonly Label[]): Layout['overlaps'] {
+  const moved = labels.filter(({ isMoved }) => isMoved);
+  return moved.flatMap((a, i) =>
+    moved
+      .slice(i + 1)
+      .filter((b) => a.place && b.place && overlap(a.place.box, b.place.box))
+      .map((b) => [a.request.id, b.request.id] as const),
+  );
+}
+
 /**
  * Places all labels of a page at once.
  *
@@ -152,7 +188,14 @@ export function layout(
   obstacles: Obstacles,
   frame: Rect,
 ): Layout {
-  const page = { frame, obstacles: obstacleIndex(obstacles, frame) };
+  // While something is dragged every label stands already and nobody asks for obstacles.
+  let index: ObstacleIndex | undefined;
+  const page: Page = {
+    frame,
+    get obstacles() {
+      return (index ??= obstacleIndex(obstacles, frame));
+    },
+  };
   const labels = requests
     .filter((request) => textOf(request).trim() !== '')
     .map((request): Label => {
@@ -163,7 +206,7 @@ export function layout(
         isMoved,
         choice: !isMoved && canStand ? choiceOf(request, page) : null,
         rank: 0,
-        place: isMoved && request.offset ? movedCandidate(request, request.offset, frame) : null,
+        place: isMoved && request.offset ? standing(request, request.offset, frame) : null,
       };
     });
   const ordered = labels
@@ -179,17 +222,10 @@ export function layout(
     }
   }
 
-  const moved = labels.filter(({ isMoved }) => isMoved);
-  const overlaps = moved.flatMap((a, i) =>
-    moved
-      .slice(i + 1)
-      .filter((b) => a.place && b.place && overlap(a.place.box, b.place.box))
-      .map((b) => [a.request.id, b.request.id] as const),
-  );
   const placed = labels.flatMap(({ request, place, isMoved }) =>
     place ? [{ request, place, isMoved }] : [],
   );
-  const drawn = placed.map(({ request, place }) => labelShapes(request, place));
+  const drawn = placed.map(({ request, place }) => drawing(request, place));
   return {
     shapes: [
       ...drawn.flatMap(({ leader }) => leader ?? []),
@@ -203,9 +239,9 @@ export function layout(
       isMoved,
       ...(place.leader && { leader: place.leader }),
     })),
-    unplaced: labels
-      .filter(({ place }) => !place)
-      .map(({ request }) => ({ id: request.id, text: textOf(request) })),
-    overlaps,
+    unplaced: labels.filter(({ place }) => !place).map(({ request }) => unplacedOf(request)),
+    get overlaps() {
+      return overlapsOf(labels);
+    },
   };
 }

@@ -1,7 +1,7 @@
 import { scale, type Scale } from '../../../core/map/plane.ts';
 import { formatReading, parseReading, type UnitId } from '../../../core/units/index.ts';
 import { mmPerPoint, type Point, type Shape, type TextRun } from '../scene/scene.ts';
-import type { Mark, MarkView } from '../mark.ts';
+import type { Mark, MarkView, StillView } from '../mark.ts';
 import { type } from '../page.ts';
 import { axisTicks, type Reading, type Tick } from '../ticks.ts';
 import { em, measure } from '../type/measure.ts';
@@ -48,7 +48,16 @@ function spacedTicks(s: Scale, length: number, reading: Reading): readonly Tick[
   }
 }
 
+/** Axes by the view that they were made for: grid and axes are two marks of them. */
+const known = new WeakMap<MarkView, readonly Axis[]>();
+
 function axesOf(v: MarkView): readonly Axis[] {
+  const made = known.get(v) ?? makeAxes(v);
+  known.set(v, made);
+  return made;
+}
+
+function makeAxes(v: MarkView): readonly Axis[] {
   const { view, map, words, results, sheet } = v;
   const T = scale(map.T.kind, map.T.range);
   const p = scale(map.p.kind, map.p.range);
@@ -98,7 +107,7 @@ function axesOf(v: MarkView): readonly Axis[] {
   return axes;
 }
 
-function spot(axis: Axis, share: number, { frame }: MarkView): Point {
+function spot(axis: Axis, share: number, { frame }: StillView): Point {
   if (axis.side === 'bottom') return [frame.x + share * frame.width, frame.y + frame.height];
   return [
     axis.side === 'left' ? frame.x : frame.x + frame.width,

@@ -1,3 +1,4 @@
+import type { Words } from '../../words/en.ts';
 import type { Mark } from '../mark.ts';
 import type { Point, Rect } from '../scene/scene.ts';
 
@@ -18,6 +19,10 @@ function hatch({ x, y, width, height }: Rect): Point[][] {
   }
   return lines;
 }
+
+/** On the cold side the end is often that nobody has published the solid's lines. */
+const told = (id: string, absent: readonly unknown[], words: Words): string =>
+  id === 'beyond-cold' && absent.length > 0 ? words.notPublished : words.noSource;
 
 /** Where the published equations end: hatched, so that nothing there looks known. */
 export const beyond: Mark<Rect & { readonly id: string }> = {
@@ -42,21 +47,21 @@ export const beyond: Mark<Rect & { readonly id: string }> = {
       { id: 'beyond-pressure', ...inner, y: frame.y, height: top - frame.y },
     ].filter(({ width, height }) => width > 0.05 && height > 0.05);
   },
-  shapes: (r, { colours, words }) => [
+  shapes: (r, { map, colours, words }) => [
     {
       kind: 'poly',
       id: r.id,
       points: hatch(r),
       closed: false,
       stroke: { colour: colours.muted, weight: 0.35, opacity: 0.6 },
-      title: words.noSource,
+      title: told(r.id, map.absent, words),
     },
   ],
-  labels: (r, { colours, words }) => [
+  labels: (r, { map, colours, words }) => [
     {
       kind: 'area',
       id: r.id,
-      runs: [{ text: words.noSource }],
+      runs: [{ text: told(r.id, map.absent, words) }],
       size: 7,
       colour: colours.muted,
       priority: 45,

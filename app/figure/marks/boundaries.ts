@@ -1,13 +1,13 @@
 import type { Boundary } from '../../../core/map/boundary.ts';
-import type { Mark, MarkView } from '../mark.ts';
+import type { Mark, StillView } from '../mark.ts';
 import { type } from '../page.ts';
 import type { Point } from '../scene/scene.ts';
 
-const line = (b: Boundary, { project }: MarkView): readonly Point[] =>
+const line = (b: Boundary, { project }: StillView): readonly Point[] =>
   b.points.map(({ T, p }) => project(T, p));
 
 /** A line too short to carry a name, or one that only runs along the frame. */
-function isFaint(points: readonly Point[], { frame }: MarkView): boolean {
+function isFaint(points: readonly Point[], { frame }: StillView): boolean {
   let length = 0;
   for (let i = 1; i < points.length; i++)
     length += Math.hypot(points[i]![0] - points[i - 1]![0], points[i]![1] - points[i - 1]![1]);
@@ -20,7 +20,7 @@ function isFaint(points: readonly Point[], { frame }: MarkView): boolean {
   );
 }
 
-const nameOf = (b: Boundary, { words, map }: MarkView): string => {
+const nameOf = (b: Boundary, { words, map }: StillView): string => {
   const kin = map.boundaries.filter(({ kind }) => kind === b.kind);
   const fluids = new Set(map.regions.map(({ phase }) => phase));
   return words.boundary(b.of, b.kind, b.form, {

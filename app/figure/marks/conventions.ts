@@ -1,9 +1,9 @@
 import type { MapPoint } from '../../../core/sheet/results.ts';
-import type { Mark, MarkView } from '../mark.ts';
+import type { Mark, StillView } from '../mark.ts';
 import type { Point } from '../scene/scene.ts';
 
 /** Upwards at the critical temperature, to the right at the critical pressure. */
-function dashes({ T, p }: MapPoint, { map, project }: MarkView): readonly (readonly Point[])[] {
+function dashes({ T, p }: MapPoint, { map, project }: StillView): readonly (readonly Point[])[] {
   const at = project(T, p);
   const top = Math.min(map.p.range[1], map.validity.pmax);
   // The melting line may come down to the critical temperature; the dashes end there.

@@ -7,7 +7,8 @@ import { pathColour, pathIndex } from './paths.ts';
 
 interface Met {
   readonly id: string;
-  readonly path: string;
+  /** Colour of its path. */
+  readonly own: string;
   readonly step: string;
   readonly encounter: Encounter;
 }
@@ -29,7 +30,7 @@ export const encounters: Mark<Met> = {
         path.steps.flatMap((step) =>
           step.encounters.map((encounter, i) => ({
             id: `${step.id}-met-${i}`,
-            path: path.id,
+            own: pathColour(view, pathIndex(view, path.id)),
             step: step.id,
             encounter,
           })),
@@ -40,7 +41,7 @@ export const encounters: Mark<Met> = {
           kind === 'crosses' && T >= Tlow && T <= Thigh && p >= plow && p <= phigh,
       );
   },
-  shapes: ({ id, path, step, encounter }, view) => {
+  shapes: ({ id, own, step, encounter }, view) => {
     const [x, y] = view.project(encounter.T, encounter.p);
     const corners: readonly Point[] = [
       [x, y - size],
@@ -56,12 +57,12 @@ export const encounters: Mark<Met> = {
         points: [corners],
         closed: true,
         fill: { colour: view.colours.paper },
-        stroke: { colour: pathColour(view, pathIndex(view, path)), weight: 1 },
+        stroke: { colour: own, weight: 1 },
         title: view.words.encounter(encounter),
       },
     ];
   },
-  labels: ({ id, path, step, encounter }, view) => [
+  labels: ({ id, own, step, encounter }, view) => [
     {
       kind: 'point',
       id,
@@ -81,7 +82,7 @@ export const encounters: Mark<Met> = {
         },
       ],
       size: type.label,
-      colour: pathColour(view, pathIndex(view, path)),
+      colour: own,
       priority: 18,
     },
   ],

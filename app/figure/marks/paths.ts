@@ -1,5 +1,5 @@
 import type { Track } from '../../../core/sheet/results.ts';
-import type { Mark, MarkView } from '../mark.ts';
+import type { Mark, MarkView, StillView } from '../mark.ts';
 import { type } from '../page.ts';
 import { mmPerPoint, type Point, type Shape } from '../scene/scene.ts';
 
@@ -32,7 +32,7 @@ export const pathIndex = ({ sheet }: Pick<MarkView, 'sheet'>, id: string): numbe
     sheet.items.filter(({ kind }) => kind === 'path').findIndex((item) => item.id === id),
   );
 
-const placed = (track: Track, { project }: MarkView): readonly Point[] =>
+const placed = (track: Track, { project }: StillView): readonly Point[] =>
   track.points.map(({ T, p }) => project(T, p));
 
 const lengthOf = (points: readonly Point[]): number =>

@@ -3,12 +3,20 @@ import { format, type UnitId } from '../../../core/units/index.ts';
 import type { Mark } from '../mark.ts';
 import { type } from '../page.ts';
 
+interface Placed extends MapPoint {
+  /** Whether the user gave its label a place. */
+  readonly isMoved: boolean;
+}
+
 /** Triple and critical points, as open circles. */
-export const points: Mark<MapPoint> = {
+export const points: Mark<Placed> = {
   id: 'points',
   layer: 'points',
   clipped: false,
-  data: ({ map, view }) => map.points.filter(({ id }) => !view.hidden.includes(id)),
+  data: ({ map, view }) =>
+    map.points
+      .filter(({ id }) => !view.hidden.includes(id))
+      .map((point) => ({ ...point, isMoved: view.labelOffsets[point.id] !== undefined })),
   shapes: ({ id, kind, phases, T, p }, { project, colours, words }) => [
     {
       kind: 'circle',
@@ -21,7 +29,7 @@ export const points: Mark<MapPoint> = {
       title: kind === 'critical' ? words.criticalPoint : words.triplePoint(phases),
     },
   ],
-  labels: ({ id, kind, phases, T, p }, { project, colours, words, view, frame }) => {
+  labels: ({ id, kind, phases, T, p, isMoved }, { project, colours, words, view, frame }) => {
     const [x, y] = project(T, p);
     const edge = Math.min(
       x - frame.x,
@@ -30,7 +38,7 @@ export const points: Mark<MapPoint> = {
       frame.y + frame.height - y,
     );
     // In the corner of a work figure the point is only where the map happens to begin.
-    if (edge < 0.8 && kind === 'triple' && !view.labelOffsets[id]) return [];
+    if (edge < 0.8 && kind === 'triple' && !isMoved) return [];
     const name = kind === 'critical' ? words.criticalPoint : words.triplePoint(phases);
     const unit = view.pressure.unit as UnitId;
     const { decimal } = words;

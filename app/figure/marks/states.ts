@@ -1,6 +1,6 @@
 import type { PathState, StateResult } from '../../../core/sheet/results.ts';
 import { format } from '../../../core/units/index.ts';
-import type { Mark, MarkView } from '../mark.ts';
+import type { Mark, MarkView, StillView } from '../mark.ts';
 import { type } from '../page.ts';
 import type { LabelRequest } from '../layout/request.ts';
 import type { Shape } from '../scene/scene.ts';
@@ -15,7 +15,7 @@ interface Coloured {
 const inside = (s: StateResult, { map }: MarkView): boolean => !map.outside.includes(s.id);
 
 /** What a path's state on a line is told by: "boiling, 121.1 °C". */
-function noteOf(s: StateResult | PathState, { words, view }: MarkView): string | null {
+function noteOf(s: StateResult | PathState, { words, view }: StillView): string | null {
   if (!('on' in s) || s.on === null) return null;
   const at = format(s.T, view.temperature.unit, { decimals: 1, decimal: words.decimal });
   return words.stateNote(words.onLine(s.on), at);

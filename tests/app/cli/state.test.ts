@@ -129,9 +129,11 @@ describe('state', () => {
 
   it.each([
     ['an ambiguous word', ['o', '--T', '300 K', '--p', '1 bar'], /water.*carbon-dioxide/],
-    ['half a formula', ['CO', '--T', '300 K', '--p', '1 bar'], /carbon-dioxide \(CO2\)\?/],
+    ['half a formula', ['CO', '--T', '300 K', '--p', '1 bar'], /carbon-dioxide \(CO2\)/],
     ['an unknown word', ['mercury', '--T', '300 K', '--p', '1 bar'], /there is water, carbon/],
     ['no substance', ['--T', '300 K', '--p', '1 bar'], /no substance is given/],
+    ['a blend', ['R-404A', '--T', '300 K', '--p', '1 bar'], /R-404A.*boils over a range/],
+    ['air', ['air', '--T', '300 K', '--p', '1 bar'], /“air” is a blend/],
     ['no pressure', ['water', '--T', '300 K'], /--T and --p/],
     ['no value', ['water', '--T', '--p', '1 bar'], /--T has no value/],
     ['an unknown option', ['water', '--x', '3'], /“--x” is no option here: --T, --p/],

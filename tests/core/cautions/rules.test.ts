@@ -74,6 +74,25 @@ describe('cautions', () => {
     expect(codes(past)).toContain(code);
   });
 
+  // A hazard of the substance stands wherever the substance does.
+  it.each([
+    'displaces air',
+    'toxic',
+    'flammable',
+    'mildly flammable',
+    'toxic in fire',
+    'oxidiser',
+    'asphyxiation',
+  ] as const)('%s is said of every state of such a substance, and of no other', (hazard) => {
+    expect(codes(state({ hazards: [hazard] }))).toContain(hazard);
+    expect(codes(state({ hazards: ['pressure'] }))).not.toContain(hazard);
+  });
+
+  it('cryogenic is said below −90 °C', () => {
+    expect(codes(state({ hazards: ['cryogenic'], T: 183.15 }))).not.toContain('cryogenic');
+    expect(codes(state({ hazards: ['cryogenic'], T: 183.1 }))).toContain('cryogenic');
+  });
+
   it('high pressure takes the place of pressure vessel', () => {
     expect(codes(state({ p: 200e6 }))).not.toContain('pressure vessel');
   });

@@ -8,8 +8,7 @@ import {
   type Plane,
   type Scale,
 } from '../../../core/map/plane.ts';
-import { carbonDioxide } from '../../../core/substances/carbon-dioxide.ts';
-import { water } from '../../../core/substances/water.ts';
+import { catalogue } from '../../../core/substances/catalogue.ts';
 
 /** Numbers from 0 to 1 that are the same for the same seed (mulberry32, public domain). */
 export function seeded(seed: number): () => number {
@@ -23,10 +22,14 @@ export function seeded(seed: number): () => number {
   };
 }
 
-export const media: readonly (readonly [name: string, m: Medium])[] = [
-  ['water', medium(water)],
-  ['carbon dioxide', medium(carbonDioxide)],
-];
+/** Every substance of the catalogue: a new one meets these tests by being listed there. */
+export const media: readonly (readonly [name: string, m: Medium])[] = await Promise.all(
+  catalogue.map(async ({ names, load }) => [names[0]!, medium(await load())] as const),
+);
+
+/** Frames a test looks at: many of the two substances with solids of their own equations, fewer of each other. */
+export const share = (m: Medium, count: number): number =>
+  m.solids.size > 0 ? count : Math.ceil(count / 4);
 
 type Range = readonly [number, number];
 
@@ -55,7 +58,10 @@ export function frames(m: Medium, seed: number, count: number): readonly Plane[]
     const linear = kinds[1] === 'linear';
     if (i % 3 === 0) {
       // The whole map, and beyond it.
-      const T: Range = [between(30, 240), between(m.critical.T * 1.05, validity.Tmax * 1.1)];
+      const T: Range = [
+        between(0.11, 0.88) * m.triple.T,
+        between(m.critical.T * 1.05, validity.Tmax * 1.1),
+      ];
       const high = 10 ** between(Math.log10(m.critical.p * 1.1), Math.log10(validity.pmax * 3));
       const p: Range = [linear ? 0 : m.triple.p * 10 ** between(-8, 0), high];
       return planeOf(kinds, T, p, width, height);

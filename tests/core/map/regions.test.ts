@@ -6,7 +6,7 @@ import type { Place, Plane } from '../../../core/map/plane.ts';
 import { regions } from '../../../core/map/regions.ts';
 import { trace } from '../../../core/map/trace.ts';
 import type { Medium } from '../../../core/equilibrium/medium.ts';
-import { distance, frames, media, seeded, told } from './frames.ts';
+import { distance, frames, media, seeded, share, told } from './frames.ts';
 
 const regionsOf = (m: Medium, plane: Plane) =>
   regions(
@@ -48,7 +48,7 @@ function expected(m: Medium, T: number, p: number): string | null {
 }
 
 describe.each(media)('regions(…) of %s', (_, m) => {
-  const planes = frames(m, 77, 150);
+  const planes = frames(m, 77, share(m, 150));
 
   it('hold each place of the frame in the field of its stable phase, and nothing that is not known', () => {
     const random = seeded(5);
@@ -76,7 +76,8 @@ describe.each(media)('regions(…) of %s', (_, m) => {
     expect(found.slice(0, 6)).toEqual([]);
     expect(located).toBeGreaterThan(planes.length * 20);
     for (const field of ['liquid', 'vapour', 'supercritical', null]) expect(met).toContain(field);
-    expect([...met].some((field) => field?.startsWith('solid'))).toBe(true);
+    const solid = [...met].some((field) => field?.startsWith('solid'));
+    expect(solid).toBe(m.substance.melting.length > 0);
   });
 
   it('have rings inside the frame, an edge a side, ids once, and no more area than the frame', () => {

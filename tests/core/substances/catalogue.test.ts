@@ -2,7 +2,12 @@ import { readdirSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { describe, expect, it } from 'vitest';
-import { catalogue, findSubstances, loadSubstance } from '../../../core/substances/catalogue.ts';
+import {
+  blendNamed,
+  catalogue,
+  findSubstances,
+  loadSubstance,
+} from '../../../core/substances/catalogue.ts';
 
 const folder = join(dirname(fileURLToPath(import.meta.url)), '../../../core/substances');
 
@@ -17,9 +22,14 @@ const ids = (word: string): readonly string[] => findSubstances(word).map(({ id 
 describe('catalogue', () => {
   it('has an entry for each substance file, and no other', () => {
     const files = readdirSync(folder)
-      .filter((name) => !['catalogue.ts', 'substance.ts'].includes(name))
+      .filter((name) => !['catalogue.ts', 'substance.ts', 'checks'].includes(name))
       .map((name) => name.replace(/\.ts$/, ''));
     expect(catalogue.map(({ id }) => id).toSorted()).toEqual(files.toSorted());
+  });
+
+  it('has a file of published values for each substance, and no other', () => {
+    const files = readdirSync(join(folder, 'checks')).map((name) => name.replace(/\.json$/, ''));
+    expect(files.toSorted()).toEqual(catalogue.map(({ id }) => id).toSorted());
   });
 
   it.each(catalogue.map((entry) => [entry.id, entry] as const))(
@@ -43,10 +53,12 @@ describe('catalogue', () => {
     },
   );
 
-  it('has ids, CAS numbers and names once', () => {
+  it('has ids and names once, CAS numbers too but for another formulation', () => {
+    const own = catalogue.filter(({ insteadOf }) => insteadOf === undefined);
     for (const all of [
       catalogue.map(({ id }) => id),
-      catalogue.map(({ cas }) => cas),
+      own.map(({ cas }) => cas),
+      own.flatMap(({ refrigerant }) => refrigerant ?? []),
       catalogue.flatMap(({ names }) => names),
     ])
       expect(new Set(all).size).toBe(all.length);
@@ -76,6 +88,26 @@ describe('findSubstances', () => {
     ['124–38–9', 'carbon-dioxide'],
     ['R744', 'carbon-dioxide'],
     ['diox', 'carbon-dioxide'],
+    // ISO 817 designations and CAS numbers of the common refrigerants: recalled.
+    ['R-717', 'ammonia'],
+    ['r717', 'ammonia'],
+    ['7664-41-7', 'ammonia'],
+    ['NH3', 'ammonia'],
+    ['NH₃', 'ammonia'],
+    ['Ammonia', 'ammonia'],
+    ['ammonia-1993', 'ammonia-1993'],
+    ['R290', 'propane'],
+    ['R-600a', 'isobutane'],
+    ['R-600', 'n-butane'],
+    ['R134a', 'r134a'],
+    ['r-1234yf', 'r1234yf'],
+    ['R-1234ze(E)', 'r1234ze-e'],
+    ['R1234ze', 'r1234ze-e'],
+    ['ethyl alcohol', 'ethanol'],
+    ['R-728', 'nitrogen'],
+    ['R-740', 'argon'],
+    ['O2', 'oxygen'],
+    ['R-50', 'methane'],
   ])('findSubstances(%j) is %s alone', (word, id) => {
     expect(ids(word)).toEqual([id]);
   });
@@ -85,16 +117,39 @@ describe('findSubstances', () => {
   });
 
   it('a word that several hold gives them all', () => {
-    expect(ids('r-7')).toEqual(['water', 'carbon-dioxide']);
-    expect(ids('i')).toEqual(['water', 'carbon-dioxide']);
+    const seven = ['water', 'carbon-dioxide', 'ammonia', 'ammonia-1993'];
+    expect(ids('r-7')).toEqual([...seven, 'nitrogen', 'oxygen', 'argon']);
+    expect(ids('butane')).toEqual(['isobutane', 'n-butane']);
+    expect(ids('C4H10')).toEqual(['isobutane', 'n-butane']);
+    expect(ids('C3H2F4')).toEqual(['r1234yf', 'r1234ze-e']);
+    expect(ids('ammon')).toEqual(['ammonia', 'ammonia-1993']);
   });
 
-  it.each(['', '   ', 'unobtainium', 'H2SO4', 'R-12', '-', '999-99-9', '*', '.*'])(
+  it.each(['', '   ', 'unobtainium', 'H2SO4', 'R-22', '-', '999-99-9', '*', '.*'])(
     'findSubstances(%j) is empty',
     (word) => {
       expect(ids(word)).toEqual([]);
     },
   );
+});
+
+describe('blendNamed', () => {
+  // Series of ISO 817: 400 zeotropic, 500 azeotropic (recalled).
+  it.each(['R-404A', 'r407c', 'R 410A', 'R-449A', 'R-448A', '404A', 'air', 'LPG', 'Natural gas'])(
+    'blendNamed(%j) boils over a range',
+    (word) => {
+      expect(blendNamed(word)).toBe('boils over a range');
+    },
+  );
+  it.each(['R-507A', 'R-502', 'R513A'])('blendNamed(%j) is an azeotrope', (word) => {
+    expect(blendNamed(word)).toBe('azeotrope');
+  });
+  it('is null for every name, number and formula of the catalogue', () => {
+    for (const { id, names, formula, cas, refrigerant } of catalogue)
+      for (const word of [id, ...names, formula, cas, refrigerant ?? id])
+        expect(blendNamed(word)).toBeNull();
+    for (const word of ['', 'R-22', 'R-4', 'hair', '450']) expect(blendNamed(word)).toBeNull();
+  });
 });
 
 describe('loadSubstance', () => {
