@@ -38,7 +38,12 @@ export default defineConfig(async () => {
       projects: [
         {
           extends: true as const,
-          test: { name: 'unit', include: ['tests/**/*.test.ts'], environment: 'node' as const },
+          test: {
+            name: 'unit',
+            include: ['tests/**/*.test.ts'],
+            environment: 'node' as const,
+            testTimeout: 60_000,
+          },
         },
         {
           extends: true as const,

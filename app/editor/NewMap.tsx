@@ -8,6 +8,7 @@ import { newKey } from './actions.ts';
 import { useAppStore, useWords } from './context.ts';
 import { Figured } from './Figured.tsx';
 import { tried } from './say.ts';
+import { SubstanceSearch } from './SubstanceSearch.tsx';
 
 /** An altitude or a barometer reading, whichever the text is. */
 function placeOf(words: Words, text: string): { ok: Start['place'] } | { trouble: string } {
@@ -48,6 +49,7 @@ export function NewMap() {
           }}
         />
       </p>
+      <SubstanceSearch onPick={(substance) => setStart((now) => ({ ...now, substance }))} />
       <p className="actions">
         <button
           className="strong"

@@ -1,8 +1,14 @@
+import { lazy, Suspense, useState } from 'react';
 import { format, formatReading, parseReading } from '../../core/units/index.ts';
 import { exportSvg, saveFile } from './actions.ts';
 import { useApp, useAppStore, useWords } from './context.ts';
 import { Figured } from './Figured.tsx';
 import { OpenButton } from './OpenButton.tsx';
+
+/** Loaded with its checks only when asked for. */
+const SubstanceCard = lazy(async () => ({
+  default: (await import('./SubstanceCard.tsx')).SubstanceCard,
+}));
 
 /** The strip above: what sheet this is, undo and redo, files. */
 export function Strip() {
@@ -13,11 +19,12 @@ export function Strip() {
   const results = useApp((s) => s.results);
   const history = useApp((s) => s.history);
   const saved = useApp((s) => s.saved);
+  const [card, setCard] = useState(false);
   if (!sheet) return null;
+  const substance = sheet.views[0]!.substance ?? sheet.substances[0]!;
   const site = sheet.sites[0];
   const local = results?.sites[0]?.local;
   const about = [
-    words.substance(sheet.substances[0]!),
     site &&
       (site.altitude
         ? `${site.name}, ${formatReading(parseReading(site.altitude, 'altitude'))}`
@@ -35,7 +42,17 @@ export function Strip() {
           }}
         />
       </h1>
-      <p className="about">{about.join(' · ')}</p>
+      <p className="about">
+        <button className="plain" onClick={() => setCard(true)}>
+          {words.substance(substance)}
+        </button>
+        {about.map((text) => ` · ${text}`).join('')}
+      </p>
+      {card && (
+        <Suspense fallback={null}>
+          <SubstanceCard id={substance} onClose={() => setCard(false)} />
+        </Suspense>
+      )}
       <span className="saved" role="status">
         {saved ? e.kept : e.keeping}
       </span>

@@ -1,7 +1,7 @@
 import type { Sheet } from '../../core/sheet/schema.ts';
 import { shared } from '../shared.ts';
 import type { AppStore } from './index.ts';
-import type { Kept, Shelf } from './shelf.ts';
+import { stampOf, type Kept, type Shelf } from './shelf.ts';
 
 export interface Tabs {
   /** Tells other tabs that a sheet was saved. */
@@ -49,18 +49,29 @@ export function keepSaved(
   let broken = false;
   /** The sheet as the shelf has it. */
   let shelved: Sheet | null = null;
+  /** What this tab last knew to lie on the shelf. */
+  let known: { readonly key: string; readonly stamp: string } | null = null;
+  const ownKey = (key: string): string => `${key}-${page}`;
+  const goOnAlone = (key: string): void => {
+    store.getState().rekey(ownKey(key));
+    store.getState().tell('news', words.ownCopy);
+  };
   const forgetTimer = (): void => {
     if (timer) clearTimeout(timer);
     timer = null;
   };
   const unsaved = (): boolean => timer !== null || store.getState().sheet !== shelved;
 
-  const save = async (sheet: Sheet | null, key: string | null): Promise<void> => {
-    forgetTimer();
-    if (!sheet || !key) return;
+  const put = async (sheet: Sheet, key: string): Promise<void> => {
     const kept: Kept = { key, sheet, saved: Date.now(), by: page };
     try {
-      await shelf.put(kept);
+      if (!(await shelf.put(kept, known?.key === key ? known.stamp : null))) {
+        // Another tab was first, and this one has not heard of it yet or is gone on already.
+        if (store.getState().sheetKey === key) goOnAlone(key);
+        else await shelf.put({ ...kept, key: ownKey(key) });
+        return;
+      }
+      known = { key, stamp: stampOf(kept) };
       tabs.say(key);
       if (broken) store.getState().tell('news', words.keptAgain);
       broken = false;
@@ -74,25 +85,27 @@ export function keepSaved(
       store.getState().setSaved(false);
     }
   };
+  /** Sheets are put one after the other, each knowing what the one before left. */
+  let turn = Promise.resolve();
+  const save = (sheet: Sheet | null, key: string | null): void => {
+    forgetTimer();
+    if (sheet && key) turn = turn.then(() => put(sheet, key));
+  };
   const saveNow = (): void => {
     const { sheet, sheetKey } = store.getState();
-    void save(sheet, sheetKey);
+    save(sheet, sheetKey);
   };
 
   const stop = store.subscribe((now, before) => {
     if (now.sheet === before.sheet && now.sheetKey === before.sheetKey) return;
     // A sheet that gives way to another, or to none, has no later turn.
     const gaveWay = now.sheetKey !== before.sheetKey && now.sheet !== before.sheet;
-    if (gaveWay && timer) void save(before.sheet, before.sheetKey);
+    if (gaveWay && timer) save(before.sheet, before.sheetKey);
     if (!now.sheet) return;
     now.setSaved(false);
     forgetTimer();
     timer = setTimeout(saveNow, delay);
   });
-  const goOnAlone = (key: string): void => {
-    store.getState().rekey(`${key}-${page}`);
-    store.getState().tell('news', words.ownCopy);
-  };
   const stopHearing = tabs.hear((key) => {
     if (key !== store.getState().sheetKey) return;
     if (unsaved()) return goOnAlone(key);
@@ -102,11 +115,13 @@ export function keepSaved(
       if (!kept || kept.by === page || !sheet || sheetKey !== key) return;
       // Only opened there, not changed.
       const theirs = shared(sheet, kept.sheet);
+      if (theirs === sheet && !unsaved()) known = { key, stamp: stampOf(kept) };
       if (theirs === sheet) return;
       if (unsaved()) return goOnAlone(key);
       edit(words.otherTab, () => theirs);
       // What came from the other tab is saved already.
       forgetTimer();
+      known = { key, stamp: stampOf(kept) };
       shelved = theirs;
       setSaved(true);
     };

@@ -1,4 +1,4 @@
-import { createStore, del, get, keys, set, type UseStore } from 'idb-keyval';
+import { createStore, del, get, keys, update, type UseStore } from 'idb-keyval';
 import { readSheet } from '../../core/sheet/read.ts';
 import type { Sheet } from '../../core/sheet/schema.ts';
 
@@ -12,9 +12,16 @@ export interface Kept {
   readonly by: string;
 }
 
+/** Tells one keeping of a sheet from every other. */
+export const stampOf = ({ saved, by }: Kept): string => `${saved} ${by}`;
+
 /** Where sheets are kept; a test passes its own. */
 export interface Shelf {
-  put: (kept: Kept) => Promise<void>;
+  /**
+   * Keeps a sheet under its key. With the stamp of what was last known to lie there, only if that
+   * still lies there; false if another page was first.
+   */
+  put: (kept: Kept, known?: string | null) => Promise<boolean>;
   take: (key: string) => Promise<Kept | undefined>;
   remove: (key: string) => Promise<void>;
   list: () => Promise<readonly Kept[]>;
@@ -32,7 +39,19 @@ export function deviceShelf(): Shelf {
   let store: UseStore | null = null;
   const db = (): UseStore => (store ??= createStore('simmerline', 'sheets'));
   return {
-    put: (kept) => set(kept.key, kept, db()),
+    put: async (kept, known = null) => {
+      let isFirst = true;
+      // Looking and keeping are one transaction, so that no other page comes in between.
+      await update<Kept>(
+        kept.key,
+        (old) => {
+          isFirst = known === null || old === undefined || stampOf(old) === known;
+          return isFirst || old === undefined ? kept : old;
+        },
+        db(),
+      );
+      return isFirst;
+    },
     take: async (key) => {
       const kept = await get<Kept>(key, db());
       return isReadable(kept) ? kept : undefined;

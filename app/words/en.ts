@@ -700,6 +700,11 @@ export const en = {
   card: {
     title: (substance: string): string => `About ${substance}`,
     close: 'Close',
+    search: 'Find a substance by name, formula, ISO 817 or CAS number',
+    searchHint: 'ammonia, NH3, R-717',
+    notFound: (word: string): string => `There is no substance ${quote(word)} here.`,
+    candidate: (name: string, formula: string, refrigerant: string | null): string =>
+      [name, formula, ...(refrigerant && refrigerant !== name ? [refrigerant] : [])].join(', '),
     identity: 'Identity',
     names: 'names',
     formula: 'formula',

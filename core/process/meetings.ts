@@ -49,7 +49,7 @@ function table(curve: BoundaryCurve): readonly Node[] {
 }
 
 /** Root between two values of opposite sign: regula falsi with halved ends (Dowell and Jarratt 1971). */
-function rootBetween(
+export function rootBetween(
   f: (u: number) => number,
   low: number,
   atLow: number,
@@ -82,7 +82,7 @@ function rootBetween(
 }
 
 /** Least |f| between two values of one sign (golden section), stopped as soon as the sign turns. */
-function nearest(f: (u: number) => number, low: number, high: number, sign: number): Node {
+export function nearest(f: (u: number) => number, low: number, high: number, sign: number): Node {
   const g = 0.5 * (3 - Math.sqrt(5));
   let [a, b] = [low, high];
   let x = a + g * (b - a);

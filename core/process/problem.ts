@@ -1,6 +1,7 @@
 import { NotConverged, OutOfRange, Undetermined, Unknown, type UnknownReason } from '../errors.ts';
 import type { BoundaryKind } from '../map/boundary.ts';
 import { ReadingError, type ReadingIssue } from '../units/index.ts';
+import type { KeptLine } from './keptLine.ts';
 
 /** Why a state has no result; carries what the sentence needs. */
 export type StateProblem =
@@ -29,7 +30,7 @@ export type StepProblem =
   | {
       readonly code: 'noBoundary';
       readonly boundary: BoundaryKind | null;
-      readonly keeps: 'T' | 'p';
+      readonly keeps: 'T' | 'p' | 'h' | 's' | 'v';
       readonly value: number;
     }
   /** No line with both phases of the fraction is met. */
@@ -69,12 +70,16 @@ export function problemOf(error: unknown): StateProblem {
   throw error;
 }
 
-/** Part of a step's way on the map: straight in T and p, or along a boundary. */
+/** Part of a step's way on the map: straight in T and p, along a boundary, or on a kept property. */
 export interface Leg {
   /** Id of the boundary it lies on; null where it is straight. */
   readonly along: string | null;
   readonly from: { readonly T: number; readonly p: number };
   readonly to: { readonly T: number; readonly p: number };
+  /** What it keeps where it is curved in T and p. */
+  readonly kept?: KeptLine;
+  /** True where its points are possible ends of the step and not states gone through. */
+  readonly locus?: boolean;
 }
 
 /** Thrown by a step that cannot reach its end, with the way it did go. */

@@ -201,7 +201,7 @@ function evaluateMap(
     ...size,
     boundaries,
     regions: fields,
-    tracks: tracksOf(own, plane, boundaries, tracks),
+    tracks: tracksOf(m, own, plane, boundaries, tracks),
     points: mapPoints(m).filter((point) => inside(point.T, point.p)),
     absent: absentLines(m.substance),
     validity: { T: [validity.vapourTmin, validity.Tmax], pmax: validity.pmax },

@@ -3,6 +3,7 @@ import { margins, type Margin } from '../map/margins.ts';
 import type { Plane } from '../map/plane.ts';
 import type { Boundary } from '../map/boundary.ts';
 import { heatAbsentOf, runPath } from '../process/path.ts';
+import { keptTrack } from '../process/keptTrack.ts';
 import type { Leg } from '../process/problem.ts';
 import type { Stand } from '../process/stand.ts';
 import type { Env } from '../process/step.ts';
@@ -122,6 +123,7 @@ export const evaluatePath = kept(function evaluatePath(
 
 /** The paths of a map's substance as vertices on its plane. `known` are those made for this plane before. */
 export const tracksOf = (
+  m: Medium,
   paths: readonly PathResult[],
   plane: Plane,
   traced: readonly Boundary[],
@@ -130,9 +132,12 @@ export const tracksOf = (
   paths.flatMap((path) =>
     path.steps.flatMap((step) =>
       step.legs.map((leg) => {
-        const points = known.get(leg) ?? trackOf(leg, plane, traced);
+        const points =
+          known.get(leg) ??
+          (leg.kept ? keptTrack(m, leg, leg.kept, plane) : trackOf(leg, plane, traced));
         known.set(leg, points);
-        return { path: path.id, step: step.id, along: leg.along, points };
+        const { along, locus = false } = leg;
+        return { path: path.id, step: step.id, along, locus, points };
       }),
     ),
   );

@@ -109,6 +109,8 @@ export interface Track {
   readonly step: string;
   /** Id of the boundary it lies on; null where it is straight in T and p. */
   readonly along: string | null;
+  /** True where its points are possible ends of the step and not states gone through: drawn dashed. */
+  readonly locus: boolean;
   readonly points: readonly { readonly T: number; readonly p: number }[];
 }
 

@@ -56,12 +56,17 @@ it('two tabs on one sheet: the idle one follows, and where both edit both are ke
 it('a full storage is told once, the work stays, and is kept as soon as there is room', async () => {
   const { page, context, troubles } = await h.open('?demo=retort', undefined, {
     before: () => {
-      IDBObjectStore.prototype.put = new Proxy(IDBObjectStore.prototype.put, {
-        apply: (put, store: IDBObjectStore, given: Parameters<IDBObjectStore['put']>) => {
-          if ('storageFreed' in globalThis) return put.apply(store, given);
-          throw new DOMException('no room', 'QuotaExceededError');
-        },
-      });
+      type Put = (
+        this: IDBObjectStore,
+        value: unknown,
+        key?: IDBValidKey,
+      ) => IDBRequest<IDBValidKey>;
+      const stores = IDBObjectStore.prototype as { put: Put };
+      const { put } = stores;
+      stores.put = function (value, key) {
+        if ('storageFreed' in globalThis) return put.call(this, value, key);
+        throw new DOMException('no room', 'QuotaExceededError');
+      };
     },
   });
   await drawn(page);
@@ -103,7 +108,8 @@ it('a worker lost once is started again, and one that cannot live is done withou
             globalThis.Worker = class extends Real {
               constructor(url: string | URL, options?: WorkerOptions) {
                 super(url, options);
-                if (count++ === 0) setTimeout(() => this.onerror?.(new ErrorEvent('error')), 30);
+                if (count++ === 0)
+                  setTimeout(() => void this.onerror?.(new ErrorEvent('error')), 30);
               }
             };
           },

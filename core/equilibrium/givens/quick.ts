@@ -62,7 +62,8 @@ function surelyFluid(m: Medium, T: number, p: number): boolean {
   if (!line) return T >= maybeSolidBelow(m, p);
   const { Tmin, Tmax } = line.range;
   if (T >= Tmax + 0.1) return true;
-  if (T <= Tmin) return false;
+  // Next to an end of the line only the line itself tells.
+  if (!(T > Tmin && T < Tmax)) return false;
   const at = meltingPressure(line.equation, T);
   const rising = meltingPressure(line.equation, Tmax) > meltingPressure(line.equation, Tmin);
   return rising ? at > 1.05 * p : at < 0.95 * p;
@@ -94,7 +95,7 @@ export function quickState(m: Medium, of: Caloric, p: number, value: number): St
   if (p > 0 && p < triple.p * (1 - 1e-8)) {
     const T = Math.min(substance.fluid.validity.Tmax, 1.2 * triple.T);
     const rho = p / (R * T);
-    return fluid(m, of, p, value, { T, rho }, (found) => found.rho < critical.rho);
+    return fluid(m, of, p, value, { T, rho }, (found) => found.rho <= triple.rhoV);
   }
   if (p > triple.p * (1 + 1e-8) && p < smooth * critical.p) {
     const s = quickSaturation(m, p);
@@ -124,6 +125,17 @@ export function quickState(m: Medium, of: Caloric, p: number, value: number): St
     const T = Math.max(cold, of === 'h' ? s.T + fall : s.T * Math.exp(Math.max(fall, -1)));
     const start = { T, rho: auxiliary(substance.saturation.liquidDensity, T) };
     return fluid(m, of, p, value, start, (found) => insideLiquid(m, found, s.T));
+  }
+  if (p > critical.p && p <= substance.fluid.validity.pmax) {
+    const atCritical = caloric(m.fluid.evaluate(critical.T, critical.rho), of);
+    if (value < atCritical) {
+      const T = Math.max(1.02 * triple.T, 0.75 * critical.T);
+      const start = { T, rho: 1.02 * auxiliary(substance.saturation.liquidDensity, T) };
+      return fluid(m, of, p, value, start, (found) => insideLiquid(m, found, critical.T));
+    }
+    const T = 1.3 * critical.T;
+    const start = { T, rho: Math.min(p / (R * T), 1.5 * critical.rho) };
+    return fluid(m, of, p, value, start, (found) => found.T > critical.T * 1.001);
   }
   return null;
 }

@@ -1,7 +1,7 @@
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { keepSaved, type Tabs } from '../../../app/store/autosave.ts';
 import { createAppStore } from '../../../app/store/index.ts';
-import type { Kept, Shelf } from '../../../app/store/shelf.ts';
+import { stampOf, type Kept, type Shelf } from '../../../app/store/shelf.ts';
 import { blank } from './sheets.ts';
 
 beforeEach(() => void vi.useFakeTimers());
@@ -21,11 +21,14 @@ function device() {
   const listeners = new Map<string, (key: string) => void>();
   const stand = { isFull: false, wait: null as Promise<void> | null };
   const shelf: Shelf = {
-    put: async (k) => {
+    put: async (k, known = null) => {
       await stand.wait;
       if (stand.isFull) throw new DOMException('full', 'QuotaExceededError');
+      const old = kept.get(k.key);
+      if (known !== null && old && stampOf(old) !== known) return false;
       puts.push(structuredClone(k));
       kept.set(k.key, structuredClone(k));
+      return true;
     },
     take: (key) => Promise.resolve(structuredClone(kept.get(key))),
     remove: (key) => Promise.resolve(void kept.delete(key)),
@@ -200,6 +203,27 @@ describe('keepSaved', () => {
     one.name('more');
     await pass(1000);
     expect(two.title()).toBe('by two');
+  });
+
+  it('where both edited and a slow storage had taken neither yet, both are kept all the same', async () => {
+    const { kept, stand, tab } = device();
+    const [one, two] = [tab('one'), tab('two')];
+    one.store.getState().openSheet(blank(), 'k');
+    await pass(400);
+    two.store.getState().openSheet(blank(), 'k');
+    await pass(400);
+    let go = (): void => undefined;
+    stand.wait = new Promise((resolve) => (go = resolve));
+    one.name('by one');
+    two.name('by two');
+    // Both are on their way to the shelf before either has heard of the other.
+    await pass(500);
+    stand.wait = null;
+    go();
+    await pass(1000);
+    expect([one.title(), two.title()]).toEqual(['by one', 'by two']);
+    expect([...kept.values()].map(({ sheet }) => sheet.title).sort()).toEqual(['by one', 'by two']);
+    expect([...one.told(), ...two.told()]).toEqual(['own copy']);
   });
 
   it('with a full storage this tab is not overrun by another one', async () => {
