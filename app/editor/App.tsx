@@ -1,9 +1,10 @@
-import { useEffect } from 'react';
+import { useEffect, type ReactNode } from 'react';
 import type { Shelf } from '../store/shelf.ts';
 import { duplicated, removed } from '../store/pathEdits.ts';
 import { openFile } from './actions.ts';
 import { Bench } from './Bench.tsx';
 import { useApp, useAppStore, useWords } from './context.ts';
+import { Guard } from './Guard.tsx';
 import { MapSummary } from './MapSummary.tsx';
 import { Messages } from './Messages.tsx';
 import { ReadingLine } from './ReadingLine.tsx';
@@ -55,9 +56,20 @@ function usePageHands(): void {
   }, [store, words]);
 }
 
+/** Its own component, so that being busy draws nothing else again. */
+function Workplace({ children }: { readonly children: ReactNode }) {
+  const busy = useApp((s) => s.evaluating);
+  return (
+    <div className="workplace" aria-busy={busy}>
+      {children}
+    </div>
+  );
+}
+
 export function App({ shelf }: { readonly shelf: Shelf }) {
   const open = useApp((s) => s.sheet !== null);
-  const busy = useApp((s) => s.evaluating);
+  const store = useAppStore();
+  const words = useWords();
   usePageHands();
   if (!open)
     return (
@@ -68,16 +80,22 @@ export function App({ shelf }: { readonly shelf: Shelf }) {
       </div>
     );
   return (
-    <div className="workplace" aria-busy={busy}>
-      <Strip />
-      <main>
-        <Bench />
-        <MapSummary />
-        <ReadingLine />
-        <RunTable />
-      </main>
-      <SideColumn />
-      <Messages />
-    </div>
+    <Guard
+      say={words.editor.broke}
+      back={words.editor.sheets}
+      onBack={() => store.getState().closeSheet()}
+    >
+      <Workplace>
+        <Strip />
+        <main>
+          <Bench />
+          <MapSummary />
+          <ReadingLine />
+          <RunTable />
+        </main>
+        <SideColumn />
+        <Messages />
+      </Workplace>
+    </Guard>
   );
 }

@@ -176,7 +176,7 @@ function written(
   write: ReturnType<typeof writer>,
   steps: { T: number; p: number },
 ): Step['end'] {
-  const { T, p, boundary, vapourFraction, solidFraction, heat } = end;
+  const { T, p, boundary, vapourFraction, solidFraction, heat, efficiency } = end;
   const share = (x: number): string => readingFromSI('fraction', x, 1, '%').text;
   return {
     ...(T === undefined ? {} : { T: write.T(T, steps.T) }),
@@ -185,6 +185,7 @@ function written(
     ...(vapourFraction === undefined ? {} : { vapourFraction: share(vapourFraction) }),
     ...(solidFraction === undefined ? {} : { solidFraction: share(solidFraction) }),
     ...(heat === undefined ? {} : { heat: readingFromSI('specificEnergy', heat, 1, 'kJ/kg').text }),
+    ...(efficiency === undefined ? {} : { efficiency: share(efficiency) }),
   };
 }
 

@@ -45,6 +45,7 @@ const quantities: Readonly<Record<string, Quantity>> = {
   vapourFraction: 'fraction',
   solidFraction: 'fraction',
   heat: 'specificEnergy',
+  efficiency: 'fraction',
 };
 
 /** Ways for a step of a kind to end, as one word each: the end's keys, a boundary by its own kind. */
@@ -68,7 +69,23 @@ const endsOf: Readonly<Record<Step['kind'], readonly string[]>> = {
   ramp: ['T p', 'T saturation', 'p saturation'],
   follow: ['T', 'p', 'T vapourFraction', 'p vapourFraction', 'T heat', 'p heat', 'T solidFraction'],
   hold: ['none', 'heat', 'vapourFraction', 'solidFraction'],
+  throttle: ['p', 'saturation', 'sublimation'],
+  isentropic: ['p', 'p efficiency'],
+  closedVessel: ['T', 'p', 'saturation', 'melting'],
+  heatAmount: ['heat'],
 };
+
+/** Kinds of step whose vapour may leave. */
+const mayVent: ReadonlySet<Step['kind']> = new Set([
+  'constantPressure',
+  'constantTemperature',
+  'ramp',
+  'follow',
+  'hold',
+]);
+
+const vapourOf = (step: Step): 'stays' | 'leaves' | undefined =>
+  'vapour' in step ? step.vapour : undefined;
 
 function endWord(step: Step): string {
   const end: End = step.end;
@@ -76,7 +93,7 @@ function endWord(step: Step): string {
   const boundary = end.boundary;
   if (boundary !== undefined) return keys.length > 0 ? `${keys[0]} ${boundary}` : boundary;
   if (keys.length === 0) return 'none';
-  return ['T', 'p', 'vapourFraction', 'solidFraction', 'heat']
+  return ['T', 'p', 'vapourFraction', 'solidFraction', 'heat', 'efficiency']
     .filter((key) => keys.includes(key))
     .join(' ');
 }
@@ -111,7 +128,7 @@ export function stepSentence(step: Step, place: StepPlace): Sentence {
     name: words.stepField(field as 'T', tag),
     quantity: quantities[field]!,
   });
-  const values = ['T', 'p', 'vapourFraction', 'solidFraction', 'heat'].filter(
+  const values = ['T', 'p', 'vapourFraction', 'solidFraction', 'heat', 'efficiency'].filter(
     (key) => end[key] !== undefined,
   );
   const names = words.endKinds as Readonly<Record<string, string>>;
@@ -119,10 +136,10 @@ export function stepSentence(step: Step, place: StepPlace): Sentence {
     [from, to].some((s) => (s?.state.parts.length ?? 1) > 1) ||
     (result?.encounters.some(({ code }) => changes.has(code)) ?? false);
   const vapour: Slot | null =
-    twoPhase || step.vapour !== undefined
+    mayVent.has(step.kind) && (twoPhase || vapourOf(step) !== undefined)
       ? {
           field: 'vapour',
-          text: step.vapour ?? 'stays',
+          text: vapourOf(step) ?? 'stays',
           name: words.stepField('vapour', tag),
           choices: (['stays', 'leaves'] as const).map((value) => ({
             value,
@@ -193,14 +210,16 @@ function reshaped(step: Step, kind: Step['kind'], word: string, place: StepPlace
     'T heat': { T, heat: old.heat ?? '0 kJ/kg' },
     'p heat': { p, heat: old.heat ?? '0 kJ/kg' },
     heat: { heat: old.heat ?? '0 kJ/kg' },
+    'p efficiency': { p, efficiency: old.efficiency ?? '75 %' },
     none: {},
   };
-  const { id, time, rate, vapour } = step;
+  const { id, time, rate } = step;
+  const vapour = mayVent.has(kind) ? vapourOf(step) : undefined;
   return {
     id,
     kind,
     ...(time !== undefined ? { time } : {}),
-    ...(rate !== undefined && kind !== 'hold' ? { rate } : {}),
+    ...(rate !== undefined && kind !== 'hold' && kind !== 'heatAmount' ? { rate } : {}),
     ...(vapour !== undefined ? { vapour } : {}),
     end: ends[word]!,
   };
@@ -213,7 +232,8 @@ export function withField(step: Step, field: string, text: string, place: StepPl
     return reshaped(step, kind, endsOf[kind][0]!, place);
   }
   if (field === 'end') return reshaped(step, step.kind, text, place);
-  if (field === 'vapour') return { ...step, vapour: text === 'leaves' ? 'leaves' : 'stays' };
+  if (field === 'vapour')
+    return { ...step, vapour: text === 'leaves' ? 'leaves' : 'stays' } as Step;
   if (field === 'time') return withTime(step, text);
   const key = field.replace(/^end\./, '');
   const taken = canonicalText(text, quantities[key]!, place);

@@ -173,7 +173,9 @@ export function composeFigure(
     .flatMap(({ labels }) => labels)
     .filter(({ id }) => !view.hidden.includes(`label-${id}`))
     .map((request) => {
-      const offset = view.labelOffsets[request.id] ?? steady?.get(request.id);
+      // Ids are the user's: one may read like something that every object has.
+      const moved = Object.hasOwn(view.labelOffsets, request.id);
+      const offset = moved ? view.labelOffsets[request.id] : steady?.get(request.id);
       return offset ? withOffset(request, offset) : request;
     });
   const met = all.map(({ obstacles }) => obstacles);

@@ -204,6 +204,13 @@ const problemQuantities: Readonly<Record<string, string>> = {
   altitude: 'The altitude',
   pressure: 'The pressure',
   'vapour fraction': 'The vapour fraction',
+  enthalpy: 'The enthalpy',
+  entropy: 'The entropy',
+  density: 'The density',
+  'internal energy': 'The internal energy',
+  superheat: 'The superheat',
+  subcooling: 'The subcooling',
+  efficiency: 'The efficiency',
 };
 
 /** Why a state has no result. */
@@ -608,6 +615,8 @@ export const en = {
     };
     switch (problem.code) {
       case 'noBoundary': {
+        if (problem.keeps !== 'p' && problem.keeps !== 'T')
+          return `no ${problem.boundary ? line[problem.boundary] : 'line'} is met on the way: choose another end`;
         const kept =
           problem.keeps === 'p'
             ? format(problem.value, 'kPa', { digits: 4, kind: 'absolute' })
@@ -857,6 +866,7 @@ export const en = {
     exported: (name: string): string =>
       `Exported ${name}. The sheet travels inside and opens again from it.`,
     lostWorker: 'The calculation was interrupted and started again; nothing was lost.',
+    broke: 'This sheet could not be shown. It is kept on this device as it was; open another one.',
     failed: (message: string): string => `This sheet could not be evaluated: ${message}`,
     scales: {
       linear: 'linear',
@@ -1057,6 +1067,20 @@ export const en = {
     ramp: 'Go in a straight line',
     follow: 'Follow the line',
     hold: 'Hold',
+    throttle: 'Let down through a valve',
+    isentropic:
+      does.p > 0
+        ? 'Pump or compress without heat'
+        : does.p < 0
+          ? 'Expand in a machine without heat'
+          : 'Compress or expand without heat',
+    closedVessel:
+      does.T > 0
+        ? 'Heat in a closed vessel'
+        : does.T < 0
+          ? 'Cool in a closed vessel'
+          : 'Heat or cool in a closed vessel',
+    heatAmount: 'Add heat at constant pressure',
   }),
   endKinds: {
     T: 'a temperature',
@@ -1074,6 +1098,7 @@ export const en = {
     'T heat': 'a temperature, with a heat of',
     'p heat': 'a pressure, with a heat of',
     heat: 'a heat of',
+    'p efficiency': 'a pressure, at an efficiency of',
     vapourFraction: 'a share of vapour',
     solidFraction: 'a share of solid',
     none: 'as it is',
@@ -1115,6 +1140,7 @@ export const en = {
       slot,
       slot.field === 'end.vapourFraction' ? ` ${parts.vapourName}` : '',
       slot.field === 'end.solidFraction' ? ' solid' : '',
+      slot.field === 'end.efficiency' ? ' efficiency' : '',
     ]),
     ...(parts.end?.quiet ? [parts.end] : []),
     parts.time.text.includes('/')
@@ -1129,7 +1155,16 @@ export const en = {
   /** Names of the fields of a step, read aloud. */
   stepField: (
     what:
-      'kind' | 'end' | 'T' | 'p' | 'vapourFraction' | 'solidFraction' | 'heat' | 'time' | 'vapour',
+      | 'kind'
+      | 'end'
+      | 'T'
+      | 'p'
+      | 'vapourFraction'
+      | 'solidFraction'
+      | 'heat'
+      | 'efficiency'
+      | 'time'
+      | 'vapour',
     tag: string,
   ): string =>
     `${
@@ -1141,6 +1176,7 @@ export const en = {
         vapourFraction: 'share of vapour',
         solidFraction: 'share of solid',
         heat: 'heat',
+        efficiency: 'isentropic efficiency',
         time: 'time or rate',
         vapour: 'what becomes of the vapour',
       }[what]

@@ -12,9 +12,11 @@ export interface KeptMeeting {
   readonly side: 0 | 1;
 }
 
+type Kept = Readonly<Record<'h' | 's' | 'v', number>>;
+
 interface Node {
   readonly point: BoundaryPoint;
-  readonly sides: readonly [Readonly<Record<'h' | 's' | 'v', number>> | null, Node['sides'][0]];
+  readonly sides: readonly [Kept | null, Kept | null];
 }
 
 const nodeCount = 96;

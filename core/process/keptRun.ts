@@ -267,18 +267,17 @@ export function keptRun(
       until: null,
       share: 0,
     });
-  // Ending on the three-phase line leaves open how much of what has changed over.
   const phases: NamedPhase[] = [];
   for (const { phases: of, curve } of stretches)
     if (curve === null && !(phases.length && samePhase(phases.at(-1)!, of[0]!)))
       phases.push(of[0]!);
-  const state = at ? onBoundary(end, at, last) : end;
+  const state = at ? onBoundary(end, at) : end;
   const on = at ? at.curve.id : end.parts.length > 1 ? (boundaryOf(m, end)?.id ?? null) : null;
   return { state, on, legs, encounters, phases };
 }
 
 /** The state at a meeting: its fractions are those of the side met, freed from rounding. */
-function onBoundary(state: State, { curve, side }: KeptMeeting, _last: Stretch): State {
+function onBoundary(state: State, { curve, side }: KeptMeeting): State {
   if (state.parts.length !== 2) return state;
   const part = state.parts.find(({ phase }) => sideOf(curve, phase) === side);
   return part ? { ...state, parts: [{ ...part, fraction: 1 }] } : state;

@@ -42,6 +42,8 @@ export const endFields = {
   solidFraction: v.optional(reading),
   /** Heat taken in along the line, per kg at the path's start. */
   heat: v.optional(reading),
+  /** Isentropic efficiency of the machine that gets there. */
+  efficiency: v.optional(reading),
 };
 
 /** Fields that every step has. */
@@ -65,6 +67,7 @@ export const quantityOfEnd: Readonly<Record<Exclude<EndKey, 'boundary'>, Quantit
   vapourFraction: 'fraction',
   solidFraction: 'fraction',
   heat: 'specificEnergy',
+  efficiency: 'fraction',
 };
 
 /** A step's end in SI, as dragging gives it; what it does not name is not said any more. */
@@ -75,6 +78,7 @@ export interface DraggedEnd {
   readonly vapourFraction?: number;
   readonly solidFraction?: number;
   readonly heat?: number;
+  readonly efficiency?: number;
 }
 
 export type SnapKind = Exclude<BoundaryKind, 'critical'>;

@@ -133,7 +133,7 @@ it('works on without a net once it is loaded', async () => {
   expect((sheetFromSvg(text) as { items: unknown[] }).items).toHaveLength(2);
   // A new map, of a substance that was not open before.
   await page.getByRole('button', { name: 'Sheets' }).click();
-  await page.getByLabel('substance').selectOption('carbon-dioxide');
+  await page.getByLabel('substance', { exact: true }).selectOption('carbon-dioxide');
   await page.getByRole('button', { name: 'Draw it' }).click();
   await drawn(page);
   await expect.poll(() => page.locator('.page svg').textContent()).toContain('DRY ICE');

