@@ -13,6 +13,9 @@ interface Way {
   readonly tracks: readonly Track[];
 }
 
+/** Dash of the locus of exits of a real machine, in points. */
+const locusDash: readonly number[] = [3, 2];
+
 /** Dashes of the paths in their order, in points; a path is told by colour, dash and letter. */
 const dashes: readonly (readonly number[] | null)[] = [
   null,
@@ -107,7 +110,13 @@ export const paths: Mark<Way> = {
         of: t.step,
         points: [lines[i]!],
         closed: false,
-        stroke: { colour, weight: 1.7, ...common, ...(dash ? { dash } : {}) },
+        stroke: {
+          colour,
+          weight: 1.7,
+          ...common,
+          // The way through a real machine is not known: what is drawn are its possible exits.
+          ...(t.locus ? { dash: locusDash } : dash ? { dash } : {}),
+        },
         title: way.name ? `${way.tag}, ${way.name}` : way.tag,
       })),
       ...way.tracks.flatMap((t, i) => arrow(lines[i]!, `${t.step}-${i}-arrow`, t.step, colour)),
